@@ -1,0 +1,7 @@
+package benchtrue.cli;
+
+public final class Main {
+    private Main() {}
+
+    public static void main(String[] args) {}
+}

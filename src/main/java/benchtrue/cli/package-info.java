@@ -1,0 +1,2 @@
+/** Commands, wiring and exit statuses; imported by nobody. */
+package benchtrue.cli;

@@ -1,0 +1,2 @@
+/** What is kept: estimates, events and summaries as files and text. */
+package benchtrue.record;

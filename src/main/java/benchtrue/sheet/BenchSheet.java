@@ -1,0 +1,32 @@
+package benchtrue.sheet;
+
+import benchtrue.model.DecisionRule;
+import java.util.List;
+import org.jspecify.annotations.Nullable;
+
+/**
+ * A bench sheet that was read without a mistake. All quantities are in the units that the sheet gives them; lists are in
+ * the order of the file.
+ *
+ * @param title what is measured, for people
+ * @param item what is under test, or empty
+ * @param cautions hazards that the sheet names for this rig, printed beside the general ones
+ * @param sha256 of the bytes of the file, in hexadecimal
+ */
+public record BenchSheet(
+        String title,
+        String item,
+        List<String> cautions,
+        List<Channel> channels,
+        List<Derived> derived,
+        List<Group> groups,
+        List<Result> results,
+        List<Joint> joint,
+        List<Point> points,
+        List<Exclusion> exclusions,
+        ReferenceSpec reference,
+        Alarms alarms,
+        DecisionRule rule,
+        @Nullable LineSpec line,
+        @Nullable Rehearsal rehearsal,
+        String sha256) {}

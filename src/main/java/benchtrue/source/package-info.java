@@ -1,0 +1,2 @@
+/** Where readings come from: replay files, serial lines, polled instruments, the simulated rig. */
+package benchtrue.source;
