@@ -2,12 +2,8 @@ package benchtrue.run;
 
 /** Told of all that happens in a run, in order, on the thread of the engine. */
 public interface RunListener {
-    /**
-     * After each reading.
-     *
-     * @param engine the state after the reading; read it now, it changes with the next
-     */
-    void reading(Engine engine);
+    /** After each reading; {@code row} is filled again with the next, so read it now. */
+    void reading(EstimateRow row);
 
     void event(Event event);
 
