@@ -3,7 +3,7 @@ package benchtrue.run;
 import benchtrue.model.Memory;
 
 /** What the operator did to the run: recorded with its reading and time, and applied again when the folder is replayed. */
-public sealed interface Act {
+public sealed interface Act extends Message {
     record Acknowledge(int alarm, String comment) implements Act {}
 
     record Shelve(int alarm, double seconds, String reason) implements Act {}
