@@ -11,12 +11,15 @@ import org.jspecify.annotations.Nullable;
  * @param title what is measured, for people
  * @param item what is under test, or empty
  * @param cautions hazards that the sheet names for this rig, printed beside the general ones
+ * @param warmUpSeconds readings before this time of the run are shown but not used; 0: none
+ * @param rule chosen beforehand; null: none was chosen, so no verdict is given
  * @param sha256 of the bytes of the file, in hexadecimal
  */
 public record BenchSheet(
         String title,
         String item,
         List<String> cautions,
+        double warmUpSeconds,
         List<Channel> channels,
         List<Derived> derived,
         List<Group> groups,
@@ -26,7 +29,7 @@ public record BenchSheet(
         List<Exclusion> exclusions,
         ReferenceSpec reference,
         Alarms alarms,
-        DecisionRule rule,
+        @Nullable DecisionRule rule,
         @Nullable LineSpec line,
         @Nullable Rehearsal rehearsal,
         String sha256) {}
