@@ -1,0 +1,67 @@
+package benchtrue.record;
+
+import benchtrue.run.Closing;
+import benchtrue.run.EstimateRow;
+import benchtrue.run.Event;
+import benchtrue.run.RunListener;
+import benchtrue.sheet.BenchSheet;
+import java.io.Closeable;
+import java.io.IOException;
+import java.nio.file.Path;
+import java.util.function.Consumer;
+
+/**
+ * The files that the program adds to a run folder: estimates and events as they come, the summary in two forms at the end.
+ * What cannot be written is told once for each file and never stops the run.
+ */
+public final class RunFiles implements RunListener, Closeable {
+    private final Path folder;
+    private final Consumer<String> trouble;
+    private final EstimatesFile estimates;
+    private final EventsFile events;
+
+    /**
+     * Begins the files afresh.
+     *
+     * @param folder exists
+     * @param every one row of estimates.csv for so many readings, at least 1
+     */
+    public RunFiles(Path folder, BenchSheet sheet, long every, Consumer<String> trouble) {
+        this.folder = folder;
+        this.trouble = trouble;
+        estimates = new EstimatesFile(folder, sheet, every, trouble);
+        events = new EventsFile(folder, trouble);
+    }
+
+    @Override
+    public void reading(EstimateRow row) {
+        estimates.reading(row);
+    }
+
+    @Override
+    public void event(Event event) {
+        events.event(event);
+    }
+
+    @Override
+    public void closed(Closing closing) {
+        write(SummaryJson.NAME, SummaryJson.of(closing));
+        write(SummaryText.NAME, SummaryText.of(closing));
+    }
+
+    private void write(String name, String text) {
+        Path file = folder.resolve(name);
+        try {
+            WholeFile.write(file, text);
+        } catch (IOException e) {
+            trouble.accept(file + ": cannot be written (" + Failure.words(e)
+                    + "). Free space or bring the folder back, then replay the run.");
+        }
+    }
+
+    @Override
+    public void close() {
+        estimates.close();
+        events.close();
+    }
+}
