@@ -7,7 +7,12 @@ import benchtrue.run.RunListener;
 import benchtrue.sheet.BenchSheet;
 import java.io.Closeable;
 import java.io.IOException;
+import java.io.InputStream;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.Arrays;
+import java.util.List;
 import java.util.function.Consumer;
 
 /**
@@ -31,6 +36,26 @@ public final class RunFiles implements RunListener, Closeable {
         this.trouble = trouble;
         estimates = new EstimatesFile(folder, sheet, every, trouble);
         events = new EventsFile(folder, trouble);
+    }
+
+    /** All files that are written into a run folder. */
+    public static List<String> names() {
+        return List.of(EstimatesFile.NAME, EventsFile.NAME, SummaryJson.NAME, SummaryText.NAME);
+    }
+
+    /** Whether an existing file begins as the ones written here do. */
+    public static boolean wrote(Path file) throws IOException {
+        String start = switch (String.valueOf(file.getFileName())) {
+            case EstimatesFile.NAME -> "reading,time";
+            case EventsFile.NAME -> "reading,time,event,";
+            case SummaryJson.NAME -> "{\n  \"program\": {\n    \"name\": \"" + Program.NAME + "\"";
+            default -> SummaryText.FIRST_WORDS;
+        };
+        byte[] wanted = start.getBytes(StandardCharsets.UTF_8);
+        try (InputStream in = Files.newInputStream(file)) {
+            byte[] found = in.readNBytes(wanted.length);
+            return found.length == 0 || Arrays.equals(found, wanted);
+        }
     }
 
     @Override
