@@ -1,0 +1,186 @@
+package benchtrue.alarm;
+
+import org.jspecify.annotations.Nullable;
+
+/** The tests of one relation: against the live model for sudden faults, against the reference model for drift. */
+public final class RelationMonitor {
+    private final Watched watched;
+    private final Budget budget;
+    private final AlarmBook book;
+    private final Channels channels;
+    private final OutlierGate gate;
+    private final StudentLimit limit = new StudentLimit();
+    private final LiveWatch live;
+    private final double[] own;
+    private @Nullable ReferenceWatch reference;
+    private double bound = Double.NaN;
+    private String untested = "no reading yet";
+
+    RelationMonitor(Watched watched, Budget budget, AlarmBook book, Channels channels) {
+        this.watched = watched;
+        this.budget = budget;
+        this.book = book;
+        this.channels = channels;
+        gate = new OutlierGate(watched.holdsOut());
+        live = new LiveWatch(watched, budget, book);
+        own = new double[watched.size()];
+    }
+
+    /**
+     * Judges a row before it is used.
+     *
+     * @param phi one regressor for each unknown of the group; read
+     * @param t standardised innovation of the live model; NaN while there is none
+     * @param nu degrees of freedom of its standard deviation
+     * @param leverage φᵀPφ of the row, relative to a reading of its weight; infinite or NaN while not determined
+     */
+    public Decision judge(
+            long number,
+            double time,
+            double[] phi,
+            double response,
+            double weight,
+            double t,
+            double nu,
+            double leverage) {
+        Decision.HoldOut objection = channels.objection(watched.channels());
+        if (objection != null) {
+            untested = objection.reason();
+            bound = Double.NaN;
+            return objection;
+        }
+        untested = whyNot(nu, leverage);
+        bound = untested.isEmpty() ? limit.at(budget.perReading(), nu) : Double.NaN;
+        Decision decision = gate.judge(t, bound);
+        tellIntermittent(number, time);
+        boolean quiet = !gate.intermittent() && !channels.unresolved(watched.channels());
+        if (untested.isEmpty() && decision instanceof Decision.Use) {
+            live.test(t, nu, number, time, reference == null && quiet);
+        }
+        testReference(number, time, phi, response, weight, quiet);
+        return decision;
+    }
+
+    private String whyNot(double nu, double leverage) {
+        if (!(leverage < Double.POSITIVE_INFINITY)) {
+            return "an unknown is not determined";
+        }
+        if (leverage > 1) {
+            return "new operating point: the prediction is an extrapolation";
+        }
+        if (!(nu >= 1)) {
+            return "the noise is not known yet";
+        }
+        return Double.isNaN(budget.perReading()) ? "the interval of readings is not known yet" : "";
+    }
+
+    private void tellIntermittent(long number, double time) {
+        if (gate.intermittent() && !book.stands(Alarm.Kind.INTERMITTENT, watched.label(), null)) {
+            book.report(
+                    Finding.ofRelation(
+                            Alarm.Kind.INTERMITTENT,
+                            watched.label(),
+                            Finding.Onset.at(time, number),
+                            Double.NaN,
+                            watched.unit(),
+                            Alarm.Priority.NEXT_STOP,
+                            watched.label()
+                                    + ": 3 or more outliers in 20 readings with good ones between: a loose connection?"
+                                    + " The estimates are held until 20 readings are good; make the rig safe, then reseat leads"));
+        } else if (!gate.intermittent() && book.stands(Alarm.Kind.INTERMITTENT, watched.label(), null)) {
+            book.normal(Alarm.Kind.INTERMITTENT, watched.label(), null);
+        }
+    }
+
+    private void testReference(long number, double time, double[] phi, double response, double weight, boolean quiet) {
+        ReferenceWatch watch = reference;
+        if (watch == null) {
+            return;
+        }
+        for (int i = 0; i < own.length; i++) {
+            own[i] = phi[watched.places()[i]];
+        }
+        watch.predict(own, response, weight);
+        if (!quiet) {
+            watch.clear();
+        } else {
+            watch.test(number, time, budget.perReading());
+        }
+    }
+
+    /** Takes its part of the group's model as its reference. */
+    void adopt(ReferenceModel model, int relation) {
+        int p = own.length;
+        int all = model.values().length;
+        double sd = model.residualSd()[relation];
+        double[] values = new double[p];
+        double[] covariance = new double[p * p];
+        for (int i = 0; i < p; i++) {
+            values[i] = model.values()[watched.places()[i]];
+            for (int j = 0; j < p; j++) {
+                covariance[i * p + j] = model.covariance()[watched.places()[i] * all + watched.places()[j]] / (sd * sd);
+            }
+        }
+        double nu = model.degreesOfFreedom()[relation];
+        ReferenceWatch.Frozen frozen = new ReferenceWatch.Frozen(values, covariance, sd, nu);
+        reference = new ReferenceWatch(watched, book, frozen, p / model.effectiveReadings(), thinning(model));
+    }
+
+    private int thinning(ReferenceModel model) {
+        return Double.isNaN(model.autocorrelation())
+                ? Math.max(1, live.autocorrelation().thinning())
+                : Autocorrelation.thinning(model.autocorrelation());
+    }
+
+    /** Whether enough innovations were seen to know how they are autocorrelated. */
+    boolean autocorrelationKnown() {
+        return live.autocorrelation().thinning() > 0;
+    }
+
+    double varianceFactor() {
+        return live.autocorrelation().varianceFactor();
+    }
+
+    /** Forgets the last innovations, as at the beginning of a segment. */
+    void restart() {
+        gate.clear();
+        live.clear();
+    }
+
+    LiveWatch live() {
+        return live;
+    }
+
+    /** The bound of |t| at the last reading; NaN where it was not tested. */
+    public double bound() {
+        return bound;
+    }
+
+    /** Why the last reading was not tested, or empty. */
+    public String untested() {
+        return untested;
+    }
+
+    /** Arms of the CUSUM as fractions of their limit: of the live model, or NaN while it is not yet tested. */
+    public double liveUp() {
+        return live.up();
+    }
+
+    public double liveDown() {
+        return live.down();
+    }
+
+    /** Arms against the reference as fractions of their limit; NaN while there is none. */
+    public double referenceUp() {
+        return reference == null ? Double.NaN : reference.up();
+    }
+
+    public double referenceDown() {
+        return reference == null ? Double.NaN : reference.down();
+    }
+
+    /** Rows beyond their bound so far. */
+    public long outliers() {
+        return gate.outliers();
+    }
+}
