@@ -1,5 +1,7 @@
 package benchtrue.alarm;
 
+import benchtrue.estimate.Quantiles;
+
 /**
  * The bound of |t| for a two-sided level and degrees of freedom. Quantiles cost microseconds: it is computed again only when
  * one of the two has moved by 0.2 %.
