@@ -11,7 +11,7 @@ import org.jspecify.annotations.Nullable;
  *
  * @param live false for a replay
  * @param time seconds since the first reading
- * @param seconds length of the run where it is known beforehand (a replay), else NaN
+ * @param progress how much of a replay is read, 0…1; NaN where that is not known (live)
  * @param pace times real time; infinite: as fast as it goes
  * @param readingAge seconds of the wall clock since the last reading came (live only)
  * @param notices one line each, what the operator should know now: held, waiting for the reference, …
@@ -25,7 +25,7 @@ public record Snapshot(
         Phase phase,
         long reading,
         double time,
-        double seconds,
+        double progress,
         double pace,
         double readingAge,
         Counts counts,
