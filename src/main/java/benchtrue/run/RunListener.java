@@ -2,7 +2,12 @@ package benchtrue.run;
 
 /** Told of all that happens in a run, in order, on the thread of the engine. */
 public interface RunListener {
-    /** After each reading; {@code row} is filled again with the next, so read it now. */
+    /** Whether the row of this reading is to be filled and told; uncertainties cost time. */
+    default boolean wants(long reading) {
+        return true;
+    }
+
+    /** After each wanted reading; {@code row} is filled again with the next, so read it now. */
     void reading(EstimateRow row);
 
     void event(Event event);

@@ -1,0 +1,58 @@
+package benchtrue.run;
+
+import benchtrue.reading.Reading;
+import benchtrue.sheet.BenchSheet;
+import benchtrue.sheet.Channel;
+import java.util.ArrayList;
+import java.util.List;
+
+/**
+ * What an error that stays the same through the run does to the rows: each channel with declared other uncertainty is moved by
+ * one standard uncertainty, and the rows are made again. To first order the estimates move by the least-squares fit of
+ * (y′ − φ′ᵀθ) − (y − φᵀθ) on φ, however the channel enters the equation (GUM 5.1.4: numerical sensitivity).
+ */
+final class Systematic {
+    private final List<String> names = new ArrayList<>();
+    private final List<Integer> channels = new ArrayList<>();
+    private final List<Double> shifts = new ArrayList<>();
+    private final List<Rows> moved = new ArrayList<>();
+    private final Reading scratch;
+
+    Systematic(BenchSheet sheet) {
+        scratch = new Reading(sheet.channels().size());
+        for (int i = 0; i < sheet.channels().size(); i++) {
+            Channel channel = sheet.channels().get(i);
+            if (channel.otherUncertainty() > 0) {
+                names.add(channel.name());
+                channels.add(i);
+                shifts.add(channel.otherUncertainty());
+                moved.add(new Rows(sheet));
+            }
+        }
+    }
+
+    int size() {
+        return names.size();
+    }
+
+    List<String> names() {
+        return List.copyOf(names);
+    }
+
+    void fill(Reading reading) {
+        for (int c = 0; c < size(); c++) {
+            scratch.number = reading.number;
+            scratch.time = reading.time;
+            System.arraycopy(reading.values, 0, scratch.values, 0, scratch.values.length);
+            scratch.values[channels.get(c)] += shifts.get(c);
+            moved.get(c).fill(scratch);
+        }
+    }
+
+    /** How far the residual of a row moves with the channel, at these estimates; NaN where a side is missing. */
+    double shift(int c, int group, int relation, Row row, double[] estimates) {
+        Row other = moved.get(c).row(group, relation);
+        return other.present ? other.residual(estimates) - row.residual(estimates) : Double.NaN;
+    }
+
+}

@@ -1,0 +1,89 @@
+package benchtrue.run;
+
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+
+/** Counts of readings. Each reading counts once: as excluded, else as held out, else as missing, else as used. */
+final class Tally {
+    /** What became of a reading, the gravest first. */
+    enum Fate {
+        EXCLUDED,
+        HELD_OUT,
+        MISSING,
+        USED
+    }
+
+    private final long[] fates = new long[Fate.values().length];
+    private final Map<String, long[]> reasons = new LinkedHashMap<>();
+    private long seen;
+    private long malformed;
+    private double first = Double.NaN;
+    private double last = Double.NaN;
+
+    void reading(double time, Fate fate) {
+        seen++;
+        fates[fate.ordinal()]++;
+        if (seen == 1) {
+            first = time;
+        }
+        last = time;
+    }
+
+    void malformed() {
+        malformed++;
+    }
+
+    /** A row or reading was left out for this reason. */
+    void leftOut(String reason, long count) {
+        reasons.computeIfAbsent(reason, r -> new long[1])[0] += count;
+    }
+
+    /** Readings that counted as held out are used after all. */
+    void takeBack(String reason, long count) {
+        leftOut(reason, -count);
+        fates[Fate.HELD_OUT.ordinal()] -= count;
+        fates[Fate.USED.ordinal()] += count;
+    }
+
+    long count(Fate fate) {
+        return fates[fate.ordinal()];
+    }
+
+    long seen() {
+        return seen;
+    }
+
+    long malformedCount() {
+        return malformed;
+    }
+
+    double last() {
+        return last;
+    }
+
+    List<Closing.Held> reasons() {
+        List<Closing.Held> held = new ArrayList<>();
+        reasons.forEach((reason, count) -> {
+            if (count[0] > 0) {
+                held.add(new Closing.Held(reason, count[0]));
+            }
+        });
+        return held;
+    }
+
+    Closing.Readings closing(long gaps) {
+        return new Closing.Readings(
+                seen,
+                count(Fate.USED),
+                count(Fate.HELD_OUT),
+                count(Fate.EXCLUDED),
+                malformed,
+                count(Fate.MISSING),
+                gaps,
+                first,
+                last,
+                last - first);
+    }
+}
