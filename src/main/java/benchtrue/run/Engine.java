@@ -221,6 +221,11 @@ public final class Engine {
         return reading;
     }
 
+    /** How often an alarm spoke so far. */
+    public long alarmsRaised() {
+        return log.alarmsRaised();
+    }
+
     /** Seconds between the last two readings; NaN before the second. */
     double interval() {
         return time - lastTime;

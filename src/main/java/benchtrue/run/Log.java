@@ -14,6 +14,7 @@ final class Log {
     private final Map<String, String> reasons = new HashMap<>();
     private final Map<String, String> untested = new HashMap<>();
     private long reading;
+    private long spoken;
     private double time;
 
     Log(RunListener listener, Tally tally) {
@@ -72,6 +73,7 @@ final class Log {
     void alarms(List<Change> changes) {
         for (int i = 0; i < changes.size(); i++) {
             Alarm alarm = changes.get(i).alarm();
+            spoken += changes.get(i).what().equals("raised") || changes.get(i).what().equals("again") ? 1 : 0;
             String text = alarm.kind().word() + ": " + alarm.text()
                     + (alarm.comment().isEmpty() ? "" : " [" + alarm.comment() + "]");
             listener.event(new Event(
@@ -85,5 +87,10 @@ final class Log {
                     alarm.unit(),
                     text));
         }
+    }
+
+    /** How often an alarm was raised or spoke again. */
+    long alarmsRaised() {
+        return spoken;
     }
 }

@@ -12,5 +12,12 @@ public interface RunListener {
 
     void event(Event event);
 
+    /** The operator did something; not told of acts that come from a recorded run. */
+    default void act(TimedAct act) {}
+
+    /** The run goes back to its first reading: all that was told is void. */
+    default void restarted() {}
+
+    /** The run is over. */
     void closed(Closing closing);
 }
