@@ -22,6 +22,7 @@ final class BatchSink implements SecondPass.Sink {
     private double from = Double.NaN;
     private double time = Double.NaN;
     private String reason = "start of the run";
+    private final boolean forgets;
     private boolean counted;
 
     BatchSink(GroupRun group) {
@@ -32,6 +33,8 @@ final class BatchSink implements SecondPass.Sink {
             weights[k] = group.estimator().relationWeight(k);
         }
         forgetting = group.group().forgetting();
+        forgets = forgetting.forgets()
+                || group.ledger().turns().stream().anyMatch(t -> t.forgetting() != null && t.forgetting().forgets());
         all = new BlockQr(constant.length);
         live = new BlockQr(constant.length);
     }
@@ -74,7 +77,7 @@ final class BatchSink implements SecondPass.Sink {
         counted = true;
         double weight = row.weight * weights[relation];
         all.add(row.phi, row.response, weight);
-        if (forgetting.forgets()) {
+        if (forgets) {
             live.add(row.phi, row.response, weight);
         }
     }
@@ -87,7 +90,7 @@ final class BatchSink implements SecondPass.Sink {
 
     /** The fit of the last segment with the weights of the live memory. */
     Fit live() {
-        return forgetting.forgets() ? live.fit(constant) : all.fit(constant);
+        return forgets ? live.fit(constant) : all.fit(constant);
     }
 
     GroupRun group() {
