@@ -73,7 +73,10 @@ final class Log {
     void alarms(List<Change> changes) {
         for (int i = 0; i < changes.size(); i++) {
             Alarm alarm = changes.get(i).alarm();
-            spoken += changes.get(i).what().equals("raised") || changes.get(i).what().equals("again") ? 1 : 0;
+            spoken += changes.get(i).what().equals("raised")
+                            || changes.get(i).what().equals("again")
+                    ? 1
+                    : 0;
             String text = alarm.kind().word() + ": " + alarm.text()
                     + (alarm.comment().isEmpty() ? "" : " [" + alarm.comment() + "]");
             listener.event(new Event(

@@ -9,9 +9,8 @@ final class Names {
 
     static List<List<String>> groups(Group group, List<List<Integer>> places) {
         return places.stream()
-                .map(one -> one.stream()
-                        .map(i -> group.unknowns().get(i).name())
-                        .toList())
+                .map(one ->
+                        one.stream().map(i -> group.unknowns().get(i).name()).toList())
                 .toList();
     }
 }

@@ -36,9 +36,7 @@ final class Rows {
             List<RelationSpec> specs = group.relations();
             regressors[g] = specs.stream().map(s -> s.relation().compile()).toArray(Regressor[]::new);
             places[g] = specs.stream().map(RelationSpec::unknownIndex).toArray(int[][]::new);
-            rows[g] = specs.stream()
-                    .map(s -> new Row(group.unknowns().size()))
-                    .toArray(Row[]::new);
+            rows[g] = specs.stream().map(s -> new Row(group.unknowns().size())).toArray(Row[]::new);
         }
     }
 

@@ -54,5 +54,4 @@ final class Systematic {
         Row other = moved.get(c).row(group, relation);
         return other.present ? other.residual(estimates) - row.residual(estimates) : Double.NaN;
     }
-
 }

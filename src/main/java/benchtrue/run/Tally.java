@@ -1,9 +1,11 @@
 package benchtrue.run;
 
 import java.util.ArrayList;
+import java.util.EnumMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 
 /** Counts of readings. Each reading counts once: as excluded, else as held out, else as missing, else as used. */
 final class Tally {
@@ -15,16 +17,26 @@ final class Tally {
         USED
     }
 
-    private final long[] fates = new long[Fate.values().length];
+    private final Map<Fate, long[]> fates = new EnumMap<>(Fate.class);
     private final Map<String, long[]> reasons = new LinkedHashMap<>();
     private long seen;
     private long malformed;
     private double first = Double.NaN;
     private double last = Double.NaN;
 
+    Tally() {
+        for (Fate fate : Fate.values()) {
+            fates.put(fate, new long[1]);
+        }
+    }
+
+    private long[] cell(Fate fate) {
+        return Objects.requireNonNull(fates.get(fate));
+    }
+
     void reading(double time, Fate fate) {
         seen++;
-        fates[fate.ordinal()]++;
+        cell(fate)[0]++;
         if (seen == 1) {
             first = time;
         }
@@ -43,12 +55,12 @@ final class Tally {
     /** Readings that counted as held out are used after all. */
     void takeBack(String reason, long count) {
         leftOut(reason, -count);
-        fates[Fate.HELD_OUT.ordinal()] -= count;
-        fates[Fate.USED.ordinal()] += count;
+        cell(Fate.HELD_OUT)[0] -= count;
+        cell(Fate.USED)[0] += count;
     }
 
     long count(Fate fate) {
-        return fates[fate.ordinal()];
+        return cell(fate)[0];
     }
 
     long seen() {

@@ -1,0 +1,227 @@
+package benchtrue.estimate;
+
+import java.util.Arrays;
+
+/**
+ * The information matrix A = R̄ᵀDR̄ and its right-hand side without square roots: R̄ is unit upper triangular with the response
+ * as one more column z, D diagonal, and θ solves R̄θ = z (Gentleman 1973, Applied Statistics algorithm AS 274; from memory).
+ * It starts with D = 0, so no prior biases the result. No method allocates.
+ */
+final class InformationFactor {
+    private final int p;
+    private final int stride;
+    /** Row i holds R̄ᵢⱼ at i·stride + j for j &gt; i, and zᵢ at i·stride + p. */
+    private final double[] r;
+
+    private final double[] d;
+    private final double[] x;
+
+    InformationFactor(int unknowns) {
+        p = unknowns;
+        stride = p + 1;
+        r = new double[p * stride];
+        d = new double[p];
+        x = new double[stride];
+    }
+
+    void clear() {
+        Arrays.fill(r, 0);
+        Arrays.fill(d, 0);
+    }
+
+    void copy(InformationFactor other) {
+        System.arraycopy(other.r, 0, r, 0, r.length);
+        System.arraycopy(other.d, 0, d, 0, p);
+    }
+
+    /** A ← factor·A; θ stays. */
+    void age(double factor) {
+        for (int i = 0; i < p; i++) {
+            d[i] *= factor;
+        }
+    }
+
+    /** A ← A + w·φφᵀ, with the response y. φ is read. */
+    void add(double[] phi, double y, double w) {
+        System.arraycopy(phi, 0, x, 0, p);
+        x[p] = y;
+        rotateIn(w);
+    }
+
+    /** Adds all of another one, each row weighted by {@code weight}. */
+    void add(InformationFactor other, double weight) {
+        for (int i = 0; i < p; i++) {
+            if (other.d[i] > 0) {
+                other.row(i, x);
+                rotateIn(weight * other.d[i]);
+            }
+        }
+    }
+
+    /** Row i of R̄ with its right-hand side; into has p + 1 entries. */
+    private void row(int i, double[] into) {
+        Arrays.fill(into, 0, i, 0);
+        into[i] = 1;
+        System.arraycopy(r, i * stride + i + 1, into, i + 1, p - i);
+    }
+
+    /** Rotates the row in {@code x} in, unknown by unknown. */
+    private void rotateIn(double weight) {
+        double w = weight;
+        for (int i = 0; i < p && w > 0; i++) {
+            double xi = x[i];
+            if (xi == 0) {
+                continue;
+            }
+            double before = d[i];
+            double after = before + w * xi * xi;
+            if (!(after > 0)) {
+                continue;
+            }
+            double c = before / after;
+            double s = w * xi / after;
+            d[i] = after;
+            w *= c;
+            int row = i * stride;
+            for (int j = i + 1; j <= p; j++) {
+                double old = x[j];
+                x[j] = old - xi * r[row + j];
+                r[row + j] = c * r[row + j] + s * old;
+            }
+        }
+    }
+
+    /**
+     * Solves R̄ᵀv = φ.
+     *
+     * @return y − vᵀz, which is y − φᵀθ
+     */
+    double eliminate(double[] phi, double y, double[] v) {
+        System.arraycopy(phi, 0, v, 0, p);
+        double e = y;
+        for (int i = 0; i < p; i++) {
+            double vi = v[i];
+            if (vi != 0) {
+                int row = i * stride;
+                for (int j = i + 1; j < p; j++) {
+                    v[j] -= vi * r[row + j];
+                }
+                e -= vi * r[row + p];
+            }
+        }
+        return e;
+    }
+
+    /** φᵀPφ from v of {@link #eliminate}; infinite where φ has a part of which nothing is known. */
+    double leverage(double[] v) {
+        double sum = 0;
+        for (int i = 0; i < p; i++) {
+            if (v[i] != 0) {
+                sum += v[i] * v[i] / d[i];
+            }
+        }
+        return sum;
+    }
+
+    /** Solves R̄θ = z. */
+    void solve(double[] theta) {
+        for (int i = p - 1; i >= 0; i--) {
+            int row = i * stride;
+            double sum = r[row + p];
+            for (int j = i + 1; j < p; j++) {
+                sum -= r[row + j] * theta[j];
+            }
+            theta[i] = sum;
+        }
+    }
+
+    /** Solves R̄x = a in place, a and x with p entries. */
+    void solveInPlace(double[] a) {
+        for (int i = p - 1; i >= 0; i--) {
+            int row = i * stride;
+            double sum = a[i];
+            for (int j = i + 1; j < p; j++) {
+                sum -= r[row + j] * a[j];
+            }
+            a[i] = sum;
+        }
+    }
+
+    /** a ← R̄a in place. */
+    void multiplyInPlace(double[] a) {
+        for (int i = 0; i < p; i++) {
+            int row = i * stride;
+            double sum = a[i];
+            for (int j = i + 1; j < p; j++) {
+                sum += r[row + j] * a[j];
+            }
+            a[i] = sum;
+        }
+    }
+
+    /** a ← D⁻¹a; 0/0 is 0. */
+    void divideInPlace(double[] a) {
+        for (int i = 0; i < p; i++) {
+            a[i] = a[i] == 0 ? 0 : a[i] / d[i];
+        }
+    }
+
+    /**
+     * A ← A − (1−μ)·Aφφᵀ A/(φᵀAφ): forgets along the direction of φ only, θ stays (Cao and Schwartz 2000, Automatica 36, 1725;
+     * from memory). With v = R̄φ, q = Σdᵢvᵢ², c = (1−μ)/q and tᵢ = tᵢ₋₁ − c·dᵢvᵢ² from t₀ = 1: dᵢ ← dᵢtᵢ/tᵢ₋₁ and
+     * R̄ᵢ ← R̄ᵢ − (c·vᵢ/tᵢ)·Σ_{j&gt;i} dⱼvⱼR̄ⱼ with the old rows. As t stays in [μ, 1], d stays positive.
+     */
+    void ageAlong(double[] phi, double mu, double[] v, double[] old) {
+        System.arraycopy(phi, 0, v, 0, p);
+        multiplyInPlace(v);
+        double q = 0;
+        for (int i = 0; i < p; i++) {
+            q += d[i] * v[i] * v[i];
+        }
+        if (!(q > Double.MIN_NORMAL)) {
+            return;
+        }
+        double c = (1 - mu) / q;
+        // Σ over the rows below, of the old rows: gathered from the last row upwards, so t is needed from its end too.
+        double t = mu;
+        Arrays.fill(x, 0);
+        for (int i = p - 1; i >= 0; i--) {
+            double before = t + c * d[i] * v[i] * v[i];
+            row(i, old);
+            double share = c * v[i] / t;
+            for (int j = i + 1; j <= p; j++) {
+                r[i * stride + j] -= share * x[j];
+            }
+            double weight = d[i] * v[i];
+            for (int j = i; j <= p; j++) {
+                x[j] += weight * old[j];
+            }
+            d[i] *= t / before;
+            t = before;
+        }
+    }
+
+    /** Diagonal entry: what is known of unknown i when those before it are left free, in units of the weights. */
+    double d(int i) {
+        return d[i];
+    }
+
+    /** Entry of R̄ for j ≥ i. */
+    double r(int i, int j) {
+        return i == j ? 1 : r[i * stride + j];
+    }
+
+    /** Diagonal of A: Σ f·w·φⱼ². */
+    double normSquared(int j) {
+        double sum = d[j];
+        for (int i = 0; i < j; i++) {
+            double entry = r[i * stride + j];
+            sum += d[i] * entry * entry;
+        }
+        return sum;
+    }
+
+    int size() {
+        return p;
+    }
+}

@@ -1,0 +1,69 @@
+package benchtrue.estimate;
+
+import java.util.Arrays;
+
+/**
+ * How the score of each unknown is autocorrelated at lag 1, and by how much that widens its uncertainty: √((1+ρ)/(1−ρ)). The
+ * score is (Pφ)ⱼ·e·Σf; without the factor Σf it would shrink as the readings grow and the start would dominate. ρ has a
+ * memory of at least 100 readings, and counts only where it is positive and more than two of its own standard deviations
+ * from 0: a chance ρ must not narrow an uncertainty.
+ */
+final class ScoreMemory {
+    private static final double LONGEST_FORGETTING = 1 - 1.0 / 100;
+    private static final double SIGNIFICANT = 2;
+    /** Beyond this ρ the readings say next to nothing of their own spread. */
+    private static final double LARGEST = 0.999;
+
+    private final double[] last;
+    private final double[] squares;
+    private final double[] products;
+    private double count;
+    private double squaredCount;
+
+    ScoreMemory(int unknowns) {
+        last = new double[unknowns];
+        squares = new double[unknowns];
+        products = new double[unknowns];
+    }
+
+    void clear() {
+        Arrays.fill(last, 0);
+        Arrays.fill(squares, 0);
+        Arrays.fill(products, 0);
+        count = 0;
+        squaredCount = 0;
+    }
+
+    /**
+     * @param gain Pφ, one for each unknown
+     * @param scale e·Σf
+     * @param factor of the estimator's forgetting at this reading
+     */
+    void add(double[] gain, double scale, double factor) {
+        double kept = Math.max(factor, LONGEST_FORGETTING);
+        count = kept * count + 1;
+        squaredCount = kept * kept * squaredCount + 1;
+        for (int j = 0; j < last.length; j++) {
+            double score = gain[j] * scale;
+            squares[j] = kept * squares[j] + score * score;
+            products[j] = kept * products[j] + score * last[j];
+            last[j] = score;
+        }
+    }
+
+    /** ρ of an unknown's score; NaN before anything is known. */
+    double autocorrelation(int unknown) {
+        return squares[unknown] > 0 ? products[unknown] / squares[unknown] : Double.NaN;
+    }
+
+    /** What the standard uncertainty is multiplied by, at least 1. */
+    double widening(int unknown) {
+        double rho = autocorrelation(unknown);
+        double readings = count * count / squaredCount;
+        if (!(rho > SIGNIFICANT / Math.sqrt(readings))) {
+            return 1;
+        }
+        double bounded = Math.min(rho, LARGEST);
+        return Math.sqrt((1 + bounded) / (1 - bounded));
+    }
+}
