@@ -85,8 +85,9 @@ final class InformationFactor {
             int row = i * stride;
             for (int j = i + 1; j <= p; j++) {
                 double old = x[j];
-                x[j] = old - xi * r[row + j];
-                r[row + j] = c * r[row + j] + s * old;
+                double left = Math.fma(-xi, r[row + j], old);
+                x[j] = left;
+                r[row + j] = c < 0.5 ? Math.fma(s, old, c * r[row + j]) : Math.fma(s, left, r[row + j]);
             }
         }
     }
