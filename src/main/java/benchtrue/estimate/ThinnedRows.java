@@ -1,0 +1,89 @@
+package benchtrue.estimate;
+
+import java.util.Arrays;
+
+/**
+ * An even thinning of rows in bounded memory: every 2ᵏ-th row is kept, k growing whenever the room is full. Which rows are kept
+ * depends on nothing but their number. Rows are stored multiplied by √w, so that all have the same variance.
+ */
+public final class ThinnedRows {
+    /** Enough for a robust fit to a third of a percent of a standard deviation, in tens of megabytes at most. */
+    private static final int MOST = 100_000;
+
+    private final int p;
+    private final int most;
+    private double[][] rows = new double[64][];
+    private int size;
+    private long seen;
+    private long stride = 1;
+
+    public ThinnedRows(int unknowns) {
+        this(unknowns, MOST);
+    }
+
+    ThinnedRows(int unknowns, int most) {
+        p = unknowns;
+        this.most = most;
+    }
+
+    /** φ is copied. */
+    public void add(double[] phi, double y, double w) {
+        if (seen++ % stride != 0) {
+            return;
+        }
+        if (size == most) {
+            halve();
+            if ((seen - 1) % stride != 0) {
+                return;
+            }
+        }
+        if (size == rows.length) {
+            rows = Arrays.copyOf(rows, Math.min(most, 2 * rows.length));
+        }
+        double root = Math.sqrt(w);
+        double[] row = new double[p + 1];
+        for (int j = 0; j < p; j++) {
+            row[j] = root * phi[j];
+        }
+        row[p] = root * y;
+        rows[size++] = row;
+    }
+
+    private void halve() {
+        int kept = 0;
+        for (int i = 0; i < size; i += 2) {
+            rows[kept++] = rows[i];
+        }
+        Arrays.fill(rows, kept, size, null);
+        size = kept;
+        stride *= 2;
+    }
+
+    int unknowns() {
+        return p;
+    }
+
+    public int size() {
+        return size;
+    }
+
+    /** Every how many-th row was kept. */
+    public long stride() {
+        return stride;
+    }
+
+    /** √w·φ with √w·y behind it; kept, not to be written. */
+    double[] row(int i) {
+        return rows[i];
+    }
+
+    /** √w·(y − φᵀθ). */
+    double residual(int i, double[] theta) {
+        double[] row = rows[i];
+        double residual = row[p];
+        for (int j = 0; j < p; j++) {
+            residual -= row[j] * theta[j];
+        }
+        return residual;
+    }
+}
