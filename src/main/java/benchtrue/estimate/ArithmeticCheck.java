@@ -17,9 +17,10 @@ public final class ArithmeticCheck {
     /**
      * @param recursive estimates of the recursion
      * @param u their standard uncertainties from the readings
-     * @param floorActed whether rows of the information floor were added: then only the first criterion counts
+     * @param byUncertaintyOnly where rounding is no measure: rows of the information floor were added, or the second
+     *     computation has fewer digits
      */
-    public static Agreement judge(double[] recursive, double[] u, Fit batch, boolean floorActed) {
+    public static Agreement judge(double[] recursive, double[] u, Fit batch, boolean byUncertaintyOnly) {
         int p = recursive.length;
         double[] inU = new double[p];
         double largest = 0;
@@ -38,17 +39,15 @@ public final class ArithmeticCheck {
                 * Math.max(1, Math.sqrt(batch.rows() / MANY_ROWS))
                 * length;
         boolean close = largest <= SHARE_OF_U;
-        boolean rounded = !floorActed && moved <= rounding;
-        return new Agreement(inU, largest, close || rounded, words(largest, close, rounded, floorActed));
+        boolean rounded = !byUncertaintyOnly && moved <= rounding;
+        return new Agreement(inU, largest, close || rounded, words(largest, close, rounded, byUncertaintyOnly));
     }
 
-    private static String words(double largest, boolean close, boolean rounded, boolean floorActed) {
+    private static String words(double largest, boolean close, boolean rounded, boolean byUncertaintyOnly) {
         String difference = String.format(Locale.ROOT, "Largest difference %.2g u", largest);
         if (close) {
             return difference + " (limit 0.01 u)"
-                    + (floorActed
-                            ? "; rows of the information floor were added, so they need not agree to rounding."
-                            : ".");
+                    + (byUncertaintyOnly ? "; they need not agree to rounding here." : ".");
         }
         return rounded
                 ? difference + ", within the rounding of double precision at this condition."

@@ -1,6 +1,7 @@
 package benchtrue.run;
 
 import benchtrue.estimate.BlockQr;
+import benchtrue.estimate.DirectionalSum;
 import benchtrue.estimate.Fit;
 import benchtrue.model.Forgetting;
 import benchtrue.model.Memory;
@@ -19,10 +20,12 @@ final class BatchSink implements SecondPass.Sink {
     private Forgetting forgetting;
     private BlockQr all;
     private BlockQr live;
+    private DirectionalSum directional;
     private double from = Double.NaN;
     private double time = Double.NaN;
     private String reason = "start of the run";
     private final boolean forgets;
+    private double elapsed;
     private boolean counted;
 
     BatchSink(GroupRun group) {
@@ -38,6 +41,7 @@ final class BatchSink implements SecondPass.Sink {
                         .anyMatch(t -> t.forgetting() != null && t.forgetting().forgets());
         all = new BlockQr(unknowns);
         live = new BlockQr(unknowns);
+        directional = new DirectionalSum(unknowns);
     }
 
     @Override
@@ -47,6 +51,7 @@ final class BatchSink implements SecondPass.Sink {
         reason = turn.segment() == null ? "" : turn.segment();
         all = new BlockQr(unknowns);
         live = new BlockQr(unknowns);
+        directional = new DirectionalSum(unknowns);
     }
 
     private void finish() {
@@ -61,7 +66,8 @@ final class BatchSink implements SecondPass.Sink {
     }
 
     @Override
-    public void next(double now, double elapsed) {
+    public void next(double now, double seconds) {
+        elapsed = seconds;
         from = Double.isNaN(from) ? now : from;
         time = now;
         counted = false;
@@ -72,13 +78,16 @@ final class BatchSink implements SecondPass.Sink {
 
     @Override
     public void row(int relation, Row row) {
-        if (!counted && forgetting.memory() instanceof Memory.Readings memory) {
-            live.age(memory.factor(0, true));
+        double factor = counted ? 1 : forgetting.memory().factor(elapsed, true);
+        if (forgetting.memory() instanceof Memory.Readings) {
+            live.age(factor);
         }
         counted = true;
         double weight = row.weight * weights[relation];
         all.add(row.phi, row.response, weight);
-        if (forgets) {
+        if (isDirectional()) {
+            directional.add(row.phi, row.response, weight, factor);
+        } else if (forgets) {
             live.add(row.phi, row.response, weight);
         }
     }
@@ -91,7 +100,14 @@ final class BatchSink implements SecondPass.Sink {
 
     /** The fit of the last segment with the weights of the live memory. */
     Fit live() {
-        return forgets ? live.fit() : all.fit();
+        if (!forgets) {
+            return all.fit();
+        }
+        return isDirectional() ? directional.fit() : live.fit();
+    }
+
+    boolean isDirectional() {
+        return forgetting.kind() == Forgetting.Kind.DIRECTIONAL;
     }
 
     /** What the weights of each relation's rows are multiplied by; read. */

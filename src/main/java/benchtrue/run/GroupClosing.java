@@ -177,8 +177,8 @@ final class GroupClosing {
         for (int i = 0; i < p; i++) {
             u[i] = Math.sqrt(covariance[i * p + i]);
         }
-        Agreement agreement =
-                ArithmeticCheck.judge(run.estimates(), u, fit, run.estimator().floorRows() > 0);
+        Agreement agreement = ArithmeticCheck.judge(
+                run.estimates(), u, fit, run.estimator().floorRows() > 0 || batch.isDirectional());
         double[] batchCovariance = forgets() ? covariance : scaled(fit);
         List<Closing.Fitted> fitted = new ArrayList<>();
         for (int i : places) {

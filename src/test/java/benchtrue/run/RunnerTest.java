@@ -3,8 +3,10 @@ package benchtrue.run;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import benchtrue.model.Forgetting;
 import benchtrue.model.Memory;
 import benchtrue.sheet.BenchSheet;
+import benchtrue.sheet.Group;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -69,6 +71,19 @@ final class RunnerTest {
         assertThat(relation.batch().agrees()).isTrue();
         assertThat(closing.alarms()).isNotEmpty();
         assertThat(closing.status()).isEqualTo(3);
+    }
+
+    @Test
+    void directionalForgettingAgreesWithItsSecondComputation() throws InterruptedException {
+        Forgetting directional = new Forgetting(Forgetting.Kind.DIRECTIONAL, new Memory.Readings(150));
+        BenchSheet sheet = Bench.sheet(new Memory.All(), 0);
+        Group group = sheet.groups().get(0);
+        BenchSheet other = Bench.with(sheet, new Group(group.relations(), group.unknowns(), directional));
+        Closing closing = run(other, new Bench.Made(1500, 9, 9999, 0), new Kept());
+        Closing.Relation relation = closing.relations().get(0);
+        assertThat(relation.batch()).isNotNull();
+        assertThat(relation.batch().largestDifferenceInU()).isLessThan(1e-6);
+        assertThat(relation.unknowns().get(0).estimate()).isEqualTo(2, within(0.003));
     }
 
     @Test
