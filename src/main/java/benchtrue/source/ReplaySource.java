@@ -1,46 +1,17 @@
 package benchtrue.source;
 
-import benchtrue.reading.Reading;
 import benchtrue.sheet.BenchSheet;
 import benchtrue.sheet.Mistake;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
-import java.time.Instant;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Locale;
-import org.jspecify.annotations.Nullable;
 
-/**
- * Readings from a file readings.csv, in its order. Rows that cannot be read are told with their line and never end a run; a
- * time that goes back a little is such a row, a device clock that starts anew is a restart.
- */
-public final class ReplaySource implements Source {
-    private static final long NANOS = 1_000_000_000L;
-
-    private final String file;
-    private final long size;
-    private final CsvRows rows;
-    private final RowReader reader;
-    private final DeviceClock clock = new DeviceClock();
-    private ReplayRow row;
-    private ReplayRow ahead;
-    private boolean hasAhead;
-    private boolean restarted;
-    private long count;
-    private String problem = "";
-    private @Nullable Instant started;
-
-    private ReplaySource(Path path, long size, CsvRows rows, RowReader reader, int channels) {
-        file = path.toString();
-        this.size = size;
-        this.rows = rows;
-        this.reader = reader;
-        row = new ReplayRow(channels);
-        ahead = new ReplayRow(channels);
-    }
+/** Readings from a file readings.csv, in its order. */
+public final class ReplaySource {
+    private ReplaySource() {}
 
     /** Reads the header; the file stays open where it is ready. */
     public static Opened open(Path readingsCsv, BenchSheet sheet) {
@@ -79,10 +50,10 @@ public final class ReplaySource implements Source {
             notices.add(new Mistake(path.toString(), (int) rows.line(), 0, "there is no reading below the header", ""));
         }
         boolean decimalComma = sheet.line() != null && sheet.line().decimalComma();
-        RowReader reader = new RowReader(rows, columns, sheet.channels(), decimalComma);
         long size = Files.isRegularFile(path) ? Files.size(path) : 0;
+        RowReader reader = new RowReader(rows, columns, sheet.channels(), decimalComma, size);
         return new Opened.Ready(
-                new ReplaySource(path, size, rows, reader, sheet.channels().size()), notices);
+                new RowSource(path.toString(), reader, sheet.channels().size()), notices);
     }
 
     private static boolean isUtf16(CsvRows rows) {
@@ -104,95 +75,5 @@ public final class ReplaySource implements Source {
         }
         String why = e.getMessage();
         return "cannot be read" + (why == null ? "" : ": " + why);
-    }
-
-    @Override
-    public Outcome next(Reading into) {
-        if (restarted) {
-            restarted = false;
-            return fill(into, clock.restart(row.nanos));
-        }
-        read();
-        if (row.outcome != Outcome.READING) {
-            return tell(row.outcome, row.problem);
-        }
-        return switch (clock.judge(row.nanos)) {
-            case ON -> fill(into, clock.take(row.nanos));
-            case REPEATS -> tell(Outcome.MALFORMED, "its time is that of the reading before");
-            case BACK ->
-                tell(Outcome.MALFORMED, away("its time lies %s s before that of an earlier row: out of order"));
-            case SET_BACK -> restart();
-            case DOUBTFUL -> doubtful(into);
-        };
-    }
-
-    /** The row after decides whether the clock really is where this row says. */
-    private Outcome doubtful(Reading into) {
-        if (!hasAhead) {
-            reader.next(ahead);
-            hasAhead = true;
-        }
-        if (ahead.outcome == Outcome.READING && !clock.bearsOut(row.nanos, ahead.nanos)) {
-            return tell(
-                    Outcome.MALFORMED, away("its time is %s s from that of the row before, and the next row is not"));
-        }
-        return clock.isBack(row.nanos) ? restart() : fill(into, clock.take(row.nanos));
-    }
-
-    private void read() {
-        if (hasAhead) {
-            ReplayRow used = row;
-            row = ahead;
-            ahead = used;
-            hasAhead = false;
-        } else {
-            reader.next(row);
-        }
-    }
-
-    private Outcome restart() {
-        restarted = true;
-        return tell(
-                Outcome.RESTART,
-                away("the device's time goes back by %s s: it started anew, or its clock was set; run time goes on"));
-    }
-
-    private String away(String text) {
-        return String.format(Locale.ROOT, text, clock.distance(row.nanos).toPlainString());
-    }
-
-    private Outcome tell(Outcome outcome, String what) {
-        problem = what.isEmpty() ? "" : file + ":" + row.line + ": " + what;
-        return outcome;
-    }
-
-    private Outcome fill(Reading into, double time) {
-        if (count == 0 && reader.isDated()) {
-            started = Instant.ofEpochSecond(Math.floorDiv(row.nanos, NANOS), Math.floorMod(row.nanos, NANOS));
-        }
-        into.number = ++count;
-        into.time = time;
-        System.arraycopy(row.values, 0, into.values, 0, row.values.length);
-        return Outcome.READING;
-    }
-
-    @Override
-    public String problem() {
-        return problem;
-    }
-
-    @Override
-    public @Nullable Instant startedUtc() {
-        return started;
-    }
-
-    @Override
-    public double progress() {
-        return size > 0 ? Math.min(1, (double) rows.consumed() / size) : Double.NaN;
-    }
-
-    @Override
-    public void close() throws IOException {
-        rows.close();
     }
 }

@@ -7,29 +7,33 @@ import java.io.IOException;
 import java.util.List;
 
 /** Turns the rows of readings.csv into device times and values in the units of the sheet. */
-final class RowReader {
+final class RowReader implements Rows {
     private final CsvRows rows;
     private final Columns columns;
     private final List<Channel> channels;
     private final boolean decimalComma;
     private final TimeCells times;
+    private final long size;
     private boolean any;
     private boolean dated;
 
-    RowReader(CsvRows rows, Columns columns, List<Channel> channels, boolean decimalComma) {
+    /** @param size of the file in bytes; 0 where it is not known */
+    RowReader(CsvRows rows, Columns columns, List<Channel> channels, boolean decimalComma, long size) {
         this.rows = rows;
         this.columns = columns;
         this.channels = channels;
         this.decimalComma = decimalComma;
+        this.size = size;
         times = new TimeCells(columns.timeDecimals());
     }
 
-    /** Whether the times are dates and times of day; known from the first row that could be read. */
-    boolean isDated() {
+    @Override
+    public boolean isDated() {
         return dated;
     }
 
-    void next(ReplayRow into) {
+    @Override
+    public void next(ReplayRow into) {
         try {
             switch (rows.next()) {
                 case ROW -> row(into);
@@ -129,5 +133,15 @@ final class RowReader {
 
     private String quoted(int cell) {
         return '"' + CellText.shown(rows.bytes(), rows.start(cell), rows.end(cell)) + '"';
+    }
+
+    @Override
+    public double progress() {
+        return size > 0 ? Math.min(1, (double) rows.consumed() / size) : Double.NaN;
+    }
+
+    @Override
+    public void close() throws IOException {
+        rows.close();
     }
 }
