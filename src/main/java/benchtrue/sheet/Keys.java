@@ -51,6 +51,10 @@ final class Keys {
         return table.contains(List.of(key));
     }
 
+    boolean hasTable(String key) {
+        return value(key) instanceof TomlTable;
+    }
+
     private @Nullable Object value(String key) {
         asked.add(key);
         return table.get(List.of(key));

@@ -175,6 +175,11 @@ final class RelationsReader {
         return memory == null ? DEFAULT_MEMORY : memory;
     }
 
+    /** In the order of the file. */
+    List<Relation> relations() {
+        return relations.stream().map(Read::relation).toList();
+    }
+
     /** Names and units of all unknowns. */
     Map<String, Unit> units() {
         Map<String, Unit> known = new LinkedHashMap<>();

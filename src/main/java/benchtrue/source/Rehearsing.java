@@ -12,7 +12,6 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
-import java.util.List;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import org.jspecify.annotations.Nullable;
@@ -96,7 +95,7 @@ public final class Rehearsing {
             csv.write(sheet.channels().stream().map(Channel::name).collect(Collectors.joining(",", "time,", "\n")));
             while (rows.advance()) {
                 if (log != null && line != null) {
-                    log.write(String.format("%.6f\t%s\\x0D\\x0A%n", rows.seconds(), text(line, rows)));
+                    log.write(String.format("%.6f\t%s\\x0D\\x0A%n", rows.seconds(), RawText.of(line, rows)));
                 }
                 if (!rows.isGarbled()) {
                     csv.write(row(rows));

@@ -11,6 +11,7 @@ import java.time.Instant;
 import java.time.format.DateTimeFormatter;
 import java.time.format.DateTimeFormatterBuilder;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import org.jspecify.annotations.Nullable;
@@ -31,6 +32,8 @@ final class SimulatedRows implements Rows {
     private long count;
     private double seconds;
     private boolean garbled;
+    private boolean moving;
+    private final double[] before;
 
     SimulatedRows(BenchSheet sheet, Rehearsal rehearsal, long seed) {
         this.rehearsal = rehearsal;
@@ -41,6 +44,7 @@ final class SimulatedRows implements Rows {
         }
         garbling = new Noise(seed, 0);
         cells = new BigDecimal[channels.size()];
+        before = new double[channels.size()];
         timeDigits = timeDigits(rehearsal.ratePerSecond());
         dates = new DateTimeFormatterBuilder().appendInstant(timeDigits).toFormatter(Locale.ROOT);
     }
@@ -57,6 +61,8 @@ final class SimulatedRows implements Rows {
         while (count < rehearsal.readings()) {
             seconds = count++ / rehearsal.ratePerSecond();
             double[] values = truth.next(seconds);
+            moving = count > 1 && !Arrays.equals(values, before);
+            System.arraycopy(values, 0, before, 0, before.length);
             for (int channel = 0; channel < cells.length; channel++) {
                 cells[channel] = indications.get(channel).next(seconds, values[channel]);
             }
@@ -86,6 +92,11 @@ final class SimulatedRows implements Rows {
         return garbled;
     }
 
+    /** Whether the truth is not what it was at the reading before. */
+    boolean isMoving() {
+        return moving;
+    }
+
     /** Real seconds since the start, whatever the device's clock says. */
     double seconds() {
         return seconds;
@@ -107,6 +118,7 @@ final class SimulatedRows implements Rows {
         return dates.format(start.plusNanos(nanos(clock)));
     }
 
+    /** Seconds since the start by the device. */
     private BigDecimal clock() {
         double off = 0;
         for (Fault fault : rehearsal.faults()) {
