@@ -1,7 +1,51 @@
 package benchtrue.cli;
 
+import benchtrue.record.Program;
+import java.io.FileDescriptor;
+import java.io.FileOutputStream;
+import java.io.PrintStream;
+import java.util.Locale;
+import java.util.Map;
+import picocli.CommandLine;
+
+/** Where the program begins: command line in, exit status out. */
 public final class Main {
     private Main() {}
 
-    public static void main(String[] args) {}
+    public static void main(String[] args) {
+        Locale.setDefault(Locale.ROOT);
+        Map<String, String> environment = System.getenv();
+        Output output = new Output(
+                new PrintStream(new FileOutputStream(FileDescriptor.out)),
+                new PrintStream(new FileOutputStream(FileDescriptor.err)),
+                Surroundings.onlyAscii(environment));
+        int status = run(args, output, environment);
+        System.exit(status);
+    }
+
+    /** Runs one command. */
+    static int run(String[] args, Output output, Map<String, String> environment) {
+        CommandLine commands = new CommandLine(new RootCommand(output))
+                .addSubcommand(new CheckCommand(output))
+                .addSubcommand(new ReplayCommand(output));
+        commands.setUsageHelpAutoWidth(false);
+        commands.setParameterExceptionHandler((wrong, arguments) -> {
+            output.error(String.valueOf(wrong.getMessage()));
+            output.error("Try: benchtrue " + commandName(wrong.getCommandLine()) + "--help");
+            return ExitStatus.USAGE.code();
+        });
+        commands.setExecutionExceptionHandler((exception, line, result) -> {
+            if (exception instanceof Refusal refusal) {
+                refusal.messages().forEach(output::error);
+                return refusal.status().code();
+            }
+            output.error(Faults.record(exception, Program.version(), environment));
+            return ExitStatus.FAULT.code();
+        });
+        return commands.execute(args);
+    }
+
+    private static String commandName(CommandLine line) {
+        return line.getParent() == null ? "" : line.getCommandName() + " ";
+    }
 }

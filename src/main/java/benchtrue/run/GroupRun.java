@@ -129,7 +129,8 @@ final class GroupRun {
             ledger.leaveOut(k, number);
             log.leftOut(label(k), "outlier");
             confirmStep(k, step.rows(), log);
-            return Tally.Fate.USED;
+            // Taken back with the others, before this reading is counted.
+            return Tally.Fate.HELD_OUT;
         }
         use(k, row);
         log.used(label(k));

@@ -32,4 +32,27 @@ public record BenchSheet(
         @Nullable DecisionRule rule,
         @Nullable LineSpec line,
         @Nullable Rehearsal rehearsal,
-        String sha256) {}
+        String sha256) {
+
+    /** The same with other groups. */
+    public BenchSheet with(List<Group> otherGroups) {
+        return new BenchSheet(
+                title,
+                item,
+                cautions,
+                warmUpSeconds,
+                channels,
+                derived,
+                otherGroups,
+                results,
+                joint,
+                points,
+                exclusions,
+                reference,
+                alarms,
+                rule,
+                line,
+                rehearsal,
+                sha256);
+    }
+}

@@ -25,7 +25,7 @@ final class SummaryTextTest {
 
     @Test
     void roundsTheEstimateWithItsUncertainty() {
-        assertThat(page).contains("11.3031 ± 0.0068");
+        assertThat(page).contains("11.3031 ± 0.0069");
     }
 
     @Test

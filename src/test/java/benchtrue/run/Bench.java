@@ -58,28 +58,6 @@ final class Bench {
                 "");
     }
 
-    /** The same with another group. */
-    static BenchSheet with(BenchSheet sheet, Group group) {
-        return new BenchSheet(
-                sheet.title(),
-                sheet.item(),
-                sheet.cautions(),
-                sheet.warmUpSeconds(),
-                sheet.channels(),
-                sheet.derived(),
-                List.of(group),
-                sheet.results(),
-                sheet.joint(),
-                sheet.points(),
-                sheet.exclusions(),
-                sheet.reference(),
-                sheet.alarms(),
-                sheet.rule(),
-                sheet.line(),
-                sheet.rehearsal(),
-                sheet.sha256());
-    }
-
     private static Unit unit(String text) {
         return Unit.parse(text).get();
     }

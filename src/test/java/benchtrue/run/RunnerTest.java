@@ -69,6 +69,8 @@ final class RunnerTest {
         assertThat(relation.segments().get(1).from()).isEqualTo(120.0, within(1e-9));
         assertThat(relation.batch()).isNotNull();
         assertThat(relation.batch().agrees()).isTrue();
+        assertThat(closing.readings().used()).isEqualTo(2000);
+        assertThat(closing.readings().heldOut()).isZero();
         assertThat(closing.alarms()).isNotEmpty();
         assertThat(closing.status()).isEqualTo(3);
     }
@@ -78,7 +80,7 @@ final class RunnerTest {
         Forgetting directional = new Forgetting(Forgetting.Kind.DIRECTIONAL, new Memory.Readings(150));
         BenchSheet sheet = Bench.sheet(new Memory.All(), 0);
         Group group = sheet.groups().get(0);
-        BenchSheet other = Bench.with(sheet, new Group(group.relations(), group.unknowns(), directional));
+        BenchSheet other = sheet.with(List.of(new Group(group.relations(), group.unknowns(), directional)));
         Closing closing = run(other, new Bench.Made(1500, 9, 9999, 0), new Kept());
         Closing.Relation relation = closing.relations().get(0);
         assertThat(relation.batch()).isNotNull();
