@@ -1,0 +1,191 @@
+package benchtrue.alarm;
+
+import java.util.stream.Stream;
+
+/**
+ * The likelihood-ratio bank (Willsky and Jones 1976): from the frozen reference, for each unknown and for the offset, whether
+ * it moved by a step or a ramp, and whether the noise grew, at each of the onsets of {@link Onsets}.
+ *
+ * <p>With e the errors against the reference in units of s, Cₐ the reference's covariance, A = Σφφᵀ, b = Σφe since the onset
+ * and r the regressor of the change (φᵢ, or τφᵢ with τ the time since onset), e has the covariance V = I + ΦCₐΦᵀ and
+ *
+ * <pre>g = rᵀV⁻¹e = Σre − cᵀWb   M = rᵀV⁻¹r = Σr² − cᵀWc   c = Σrφ   W = (Cₐ⁻¹ + A)⁻¹   ℓ = g²/M</pre>
+ *
+ * For a step this is M = (A⁻¹ + Cₐ)⁻¹ and g = MA⁻¹b, but needs no inverse of A, which is deficient while the operating point
+ * stands still. The shortcut without W names wrongly in one case of a hundred.
+ *
+ * <p>Noise, with q the mean square of n readings and ν the degrees of freedom of s: ℓ = (n + ν)·ln((nq + ν)/(n + ν)) −
+ * n·ln q.
+ */
+final class Bank {
+    /** Onsets that are looked at each time; those before them change slowly and are looked at each fourth time. */
+    private static final int NEAR = 13;
+
+    private static final int ALL = 4;
+
+    /** What is left of a sum after rounding. */
+    private static final double NOTHING = 1e-12;
+
+    /** Below it a mean square is no evidence: saves two logarithms. */
+    private static final double NOISE_WORTH_IT = 4;
+
+    private final int q;
+    private final double[] information;
+    private final double nu;
+    private final Onsets onsets;
+    private final Sums[] list = new Sums[Onsets.most()];
+    private final Sums since;
+    private final Evidence[] near;
+    private final Evidence[] far;
+    private final double[] inverse;
+    private final double[] explained;
+    private int listed;
+    private int untilAll;
+
+    /**
+     * @param covariance Cₐ of the regressors' unknowns in units of s², q×q; zero for what is not an unknown of the reference
+     * @param nu degrees of freedom of s, above 0, may be infinite
+     */
+    Bank(double[] covariance, double nu) {
+        q = (int) Math.round(Math.sqrt(covariance.length));
+        information = Symmetric.information(covariance, q);
+        this.nu = nu;
+        onsets = new Onsets(q);
+        since = new Sums(q);
+        near = Stream.generate(Evidence::new).limit(q + 1).toArray(Evidence[]::new);
+        far = Stream.generate(Evidence::new).limit(q + 1).toArray(Evidence[]::new);
+        inverse = new double[q * q];
+        explained = new double[q];
+    }
+
+    void add(double[] phi, double error, double z, double time, long number) {
+        onsets.add(phi, error, z, time, number);
+    }
+
+    void clear() {
+        onsets.clear();
+        reset();
+    }
+
+    void forgetSince(double time) {
+        onsets.forgetSince(time);
+        reset();
+    }
+
+    private void reset() {
+        listed = 0;
+        untilAll = 0;
+        clear(near);
+        clear(far);
+    }
+
+    /** Looks at all hypotheses at the onsets of the last hundred readings, and at times at all of them. */
+    void evaluate() {
+        boolean all = --untilAll <= 0;
+        listed = onsets.list(list);
+        clear(near);
+        for (int k = 0; k < Math.min(listed, NEAR); k++) {
+            consider(k, near);
+        }
+        if (all) {
+            untilAll = ALL;
+            clear(far);
+            for (int k = NEAR; k < listed; k++) {
+                consider(k, far);
+            }
+        }
+    }
+
+    private static void clear(Evidence[] evidence) {
+        for (Evidence each : evidence) {
+            each.clear();
+        }
+    }
+
+    private void consider(int k, Evidence[] evidence) {
+        extend(k);
+        prepare();
+        for (int i = 0; i < q; i++) {
+            Evidence cause = evidence[i];
+            offer(cause, false, since.products, i * q, since.products[i * q + i], since.scores[i]);
+            offer(cause, true, since.timed, i * q, since.timedTwice[i], since.timedScores[i]);
+        }
+        noise(evidence[q]);
+    }
+
+    /** Takes one more stretch into the sums since the onset; they count time from that onset. */
+    private void extend(int k) {
+        if (k == 0) {
+            since.copy(list[0]);
+            return;
+        }
+        since.reach(list[k]);
+    }
+
+    /** Computes the sums since an onset afresh, with W and Wb, for what is asked rarely. */
+    Sums sumsSince(double time) {
+        listed = onsets.list(list);
+        for (int k = 0; k < listed && (k == 0 || list[k].start >= time); k++) {
+            extend(k);
+        }
+        prepare();
+        return since;
+    }
+
+    /** W and Wb. */
+    private void prepare() {
+        double[] a = since.products;
+        for (int at = 0; at < inverse.length; at++) {
+            inverse[at] = information[at] + a[at];
+        }
+        Symmetric.invert(inverse, q);
+        for (int i = 0, row = 0; i < q; i++, row += q) {
+            double sum = 0;
+            for (int j = 0; j < q; j++) {
+                sum += inverse[row + j] * since.scores[j];
+            }
+            explained[i] = sum;
+        }
+    }
+
+    /** What is left of Σr² and Σre once the reference's own uncertainty is taken off. */
+    private void offer(Evidence cause, boolean ramp, double[] crossed, int row, double full, double scored) {
+        double m = full;
+        double g = scored;
+        for (int i = 0, at = 0; i < q; i++) {
+            double sum = 0;
+            for (int j = 0; j < q; j++, at++) {
+                sum += inverse[at] * crossed[row + j];
+            }
+            m -= crossed[row + i] * sum;
+            g -= crossed[row + i] * explained[i];
+        }
+        if (m > NOTHING * full) {
+            cause.offer(g * g / m, ramp, since, g, m);
+        }
+    }
+
+    private void noise(Evidence evidence) {
+        double n = since.count;
+        double mean = since.squares / n;
+        if (mean > 1 && n * (mean - 1) * (mean - 1) > NOISE_WORTH_IT) {
+            double all = Double.isInfinite(nu) ? n * (mean - 1) : (n + nu) * Math.log((n * mean + nu) / (n + nu));
+            evidence.offer(all - n * Math.log(mean), false, since, mean, n);
+        }
+    }
+
+    /** For each regressor at its best onset; behind them for the noise. */
+    Evidence evidence(int i) {
+        return near[i].ratio >= far[i].ratio ? near[i] : far[i];
+    }
+
+    /** How many causes there is evidence for: the regressors and the noise. */
+    int size() {
+        return q + 1;
+    }
+
+    /** When the oldest onset considered began, in s; NaN while there is none. */
+    double oldest() {
+        return listed == 0 ? Double.NaN : list[listed - 1].start;
+    }
+}

@@ -1,0 +1,117 @@
+package benchtrue.alarm;
+
+import java.util.Arrays;
+
+/**
+ * The last 8192 readings as sums over stretches of 4, 8, 16, … 1024 readings, three or four of each length: the beginnings of
+ * the stretches are the onsets that are considered, spaced geometrically, some 36 in all. Old stretches merge as new ones
+ * come, so nothing accumulates rounding for longer than it is kept, and nothing is allocated.
+ */
+final class Onsets {
+    /** Readings of the shortest stretch. */
+    static final int SHORTEST = 4;
+
+    private static final int LENGTHS = 9;
+    private static final int EACH = 4;
+
+    /** Newest first within each length, and one to spare. */
+    private final Sums[][] stretches = new Sums[LENGTHS][EACH + 1];
+
+    private final int[] filled = new int[LENGTHS];
+    private Sums open;
+
+    Onsets(int regressors) {
+        for (Sums[] row : stretches) {
+            for (int i = 0; i < row.length; i++) {
+                row[i] = new Sums(regressors);
+            }
+        }
+        open = new Sums(regressors);
+    }
+
+    void add(double[] phi, double error, double z, double time, long number) {
+        if (open.count == 0) {
+            open.clear(time, number);
+        }
+        open.add(phi, error, z, time);
+        if (open.count == SHORTEST) {
+            open = push(0, open);
+        }
+    }
+
+    /** Puts a stretch in front of those of its length, and merges the two oldest where there are too many. */
+    private Sums push(int length, Sums stretch) {
+        Sums[] row = stretches[length];
+        Sums spare = row[EACH];
+        System.arraycopy(row, 0, row, 1, EACH);
+        row[0] = stretch;
+        if (++filled[length] > EACH) {
+            merge(length);
+        }
+        spare.count = 0;
+        return spare;
+    }
+
+    private void merge(int length) {
+        Sums[] row = stretches[length];
+        filled[length] = EACH - 1;
+        if (length + 1 < LENGTHS) {
+            Sums both = row[EACH - 1];
+            both.reach(row[EACH]);
+            row[EACH - 1] = row[EACH];
+            row[EACH] = push(length + 1, both);
+        } else {
+            filled[length] = EACH;
+        }
+    }
+
+    void clear() {
+        Arrays.fill(filled, 0);
+        open.count = 0;
+    }
+
+    /** Forgets the stretches that reach beyond this time; each ends where the next newer one starts. */
+    void forgetSince(double time) {
+        double end = open.count > 0 ? open.start : Double.POSITIVE_INFINITY;
+        open.count = 0;
+        for (int length = 0; length < LENGTHS; length++) {
+            int from = 0;
+            while (from < filled[length] && end > time) {
+                end = stretches[length][from].start;
+                from++;
+            }
+            drop(length, from);
+            if (filled[length] > 0) {
+                return;
+            }
+        }
+    }
+
+    private void drop(int length, int newest) {
+        Sums[] row = stretches[length];
+        for (int i = newest; i < filled[length]; i++) {
+            Sums kept = row[i];
+            row[i] = row[i - newest];
+            row[i - newest] = kept;
+        }
+        filled[length] -= newest;
+    }
+
+    /** All stretches, newest first, into an array of at least {@link #most()}; the one being filled leads. */
+    int list(Sums[] into) {
+        int n = 0;
+        if (open.count > 0) {
+            into[n++] = open;
+        }
+        for (int length = 0; length < LENGTHS; length++) {
+            for (int i = 0; i < filled[length]; i++) {
+                into[n++] = stretches[length][i];
+            }
+        }
+        return n;
+    }
+
+    static int most() {
+        return LENGTHS * EACH + 1;
+    }
+}
