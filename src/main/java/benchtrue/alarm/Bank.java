@@ -1,6 +1,7 @@
 package benchtrue.alarm;
 
 import java.util.stream.Stream;
+import org.jspecify.annotations.Nullable;
 
 /**
  * The likelihood-ratio bank (Willsky and Jones 1976): from the frozen reference, for each unknown and for the offset, whether
@@ -37,6 +38,7 @@ final class Bank {
     private final Sums since;
     private final Evidence[] near;
     private final Evidence[] far;
+    private final Evidence[] one;
     private final double[] inverse;
     private final double[] explained;
     private int listed;
@@ -53,6 +55,7 @@ final class Bank {
         onsets = new Onsets(q);
         since = new Sums(q);
         near = Stream.generate(Evidence::new).limit(q + 1).toArray(Evidence[]::new);
+        one = Stream.generate(Evidence::new).limit(q + 1).toArray(Evidence[]::new);
         far = Stream.generate(Evidence::new).limit(q + 1).toArray(Evidence[]::new);
         inverse = new double[q * q];
         explained = new double[q];
@@ -122,14 +125,103 @@ final class Bank {
         since.reach(list[k]);
     }
 
-    /** Computes the sums since an onset afresh, with W and Wb, for what is asked rarely. */
+    /** Computes the sums since an onset afresh, with W and Wb, for what is asked rarely; null where nothing is left. */
+    @Nullable
     Sums sumsSince(double time) {
         listed = onsets.list(list);
-        for (int k = 0; k < listed && (k == 0 || list[k].start >= time); k++) {
-            extend(k);
+        int k = 0;
+        while (k < listed && (k == 0 || list[k].start >= time)) {
+            extend(k++);
+        }
+        if (k == 0) {
+            return null;
         }
         prepare();
         return since;
+    }
+
+    /**
+     * M and g of a step of all regressors at once, for the onset of the last {@link #sumsSince}.
+     *
+     * @param m q×q, written
+     * @param g written
+     */
+    void joint(double[] m, double[] g) {
+        double[] a = since.products;
+        for (int i = 0; i < q; i++) {
+            g[i] = since.scores[i];
+            for (int k = 0; k < q; k++) {
+                g[i] -= a[i * q + k] * explained[k];
+            }
+            for (int j = 0; j < q; j++) {
+                double sum = a[i * q + j];
+                for (int k = 0; k < q; k++) {
+                    for (int l = 0; l < q; l++) {
+                        sum -= a[i * q + k] * inverse[k * q + l] * a[l * q + j];
+                    }
+                }
+                m[i * q + j] = sum;
+            }
+        }
+    }
+
+    /** Looks at one cause at all onsets, oldest last, and tells how far back the evidence stays within a distance of its best. */
+    void interval(int cause, double within, Interval into) {
+        double best = evidence(cause).ratio;
+        into.from = Double.NaN;
+        into.to = Double.NaN;
+        listed = onsets.list(list);
+        double newer = Double.NaN;
+        boolean inside = false;
+        for (int k = 0; k < listed; k++) {
+            clear(one);
+            consider(k, one);
+            boolean close = one[cause].ratio >= best - within;
+            if (close && Double.isNaN(into.to)) {
+                into.to = Double.isNaN(newer) ? since.start : newer;
+            }
+            if (close || inside) {
+                into.from = since.start;
+            }
+            inside = close;
+            newer = since.start;
+        }
+    }
+
+    /**
+     * By how much 2·ln of the likelihood of the readings since some time, whichever speaks most clearly, is larger without a
+     * change than with it: for a change δ of an unknown −(2δg − δ²M), for noise grown by the factor f
+     * n(2 ln f − q(1 − 1/f²)). Of a ramp only the last quarter of its time counts, in which it is much like a step.
+     */
+    double against(Cause cause, double now) {
+        double onset = cause.onset().time();
+        double from = cause.ramp() ? now - (now - onset) / 4 : onset;
+        double most = 0;
+        listed = onsets.list(list);
+        for (int k = 0; k < listed && list[k].start > from; k++) {
+            extend(k);
+            most = Math.max(most, cause.leader() == q ? againstNoise(cause.change()) : againstChange(cause));
+        }
+        return most;
+    }
+
+    private double againstNoise(double factor) {
+        double variance = factor * factor;
+        return since.count * Math.log(variance) - since.squares * (1 - 1 / variance);
+    }
+
+    private double againstChange(Cause cause) {
+        int i = cause.leader();
+        prepare();
+        one[i].clear();
+        offer(one[i], false, since.products, i * q, since.products[i * q + i], since.scores[i]);
+        return cause.change() * (cause.change() * one[i].information - 2 * one[i].score);
+    }
+
+    /** An onset lies between these times; NaN where it is not known. */
+    static final class Interval {
+        double from;
+        double to;
     }
 
     /** W and Wb. */
@@ -182,6 +274,10 @@ final class Bank {
     /** How many causes there is evidence for: the regressors and the noise. */
     int size() {
         return q + 1;
+    }
+
+    int regressors() {
+        return q;
     }
 
     /** When the oldest onset considered began, in s; NaN while there is none. */

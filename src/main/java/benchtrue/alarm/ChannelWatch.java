@@ -219,6 +219,11 @@ final class ChannelWatch {
         return now == Status.GOOD || now == Status.SILENT ? null : channel.name() + " " + now.word();
     }
 
+    /** When the present trouble began, in s. */
+    double troubleSince() {
+        return onset().time();
+    }
+
     /** Whether identical values have come in a row that may yet turn out to be a stuck channel. */
     boolean unresolved() {
         return noise.telling() && run >= DELAY && run * Math.log(noise.repeats()) < Math.log(SUSPICIOUS);

@@ -33,6 +33,17 @@ final class Channels {
         return null;
     }
 
+    /** When the trouble began that is objected to, in s. */
+    double troubleSince(int[] channels) {
+        double since = Double.POSITIVE_INFINITY;
+        for (int channel : channels) {
+            if (watches[channel].objection() != null) {
+                since = Math.min(since, watches[channel].troubleSince());
+            }
+        }
+        return since;
+    }
+
     /** Whether one of them repeats its value and may turn out to be stuck. */
     boolean unresolved(int[] channels) {
         for (int channel : channels) {

@@ -14,11 +14,12 @@ public final class GroupMonitor {
     private final List<RelationMonitor> relations = new ArrayList<>();
     private final List<ReferenceModel> references = new ArrayList<>();
 
-    GroupMonitor(Group group, List<Watched> watched, Budget budget, AlarmBook book, Channels channels) {
+    GroupMonitor(
+            Group group, List<Watched> watched, Budget budget, AlarmBook book, Channels channels, ClockWatch clock) {
         this.group = group;
         this.book = book;
         for (Watched each : watched) {
-            relations.add(new RelationMonitor(each, budget, book, channels));
+            relations.add(new RelationMonitor(each, budget, book, channels, clock));
         }
     }
 

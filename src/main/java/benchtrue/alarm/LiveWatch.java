@@ -65,19 +65,31 @@ final class LiveWatch {
         }
         quiet = 0;
         if (raises) {
-            String text = watched.label() + ": the innovations of the live model have moved to one side since reading "
-                    + cusum.since() + "; no reference model is adopted yet, so the cause is not told";
-            Finding.Onset onset = new Finding.Onset(Double.NaN, Double.NaN, time, cusum.since());
-            book.report(Finding.ofRelation(
-                    Alarm.Kind.STEP,
-                    watched.label(),
-                    onset,
-                    Double.NaN,
-                    watched.unit(),
-                    Alarm.Priority.NEXT_STOP,
-                    text));
+            tell(
+                    new Finding.Onset(Double.NaN, Double.NaN, time, cusum.since()),
+                    ": the innovations of the live model have moved to one side since reading " + cusum.since());
         }
         cusum.clear();
+    }
+
+    /** A step that a row of outliers on one side has confirmed. */
+    void tellStep(double t, long number, double now) {
+        quiet = 0;
+        tell(
+                new Finding.Onset(Double.NaN, Double.NaN, now, number - OutlierGate.ROW + 1),
+                ": a step, " + OutlierGate.ROW + " readings in a row are beyond their bound on one side, the last by "
+                        + Words.number(t) + " standard deviations; a new segment begins");
+    }
+
+    private void tell(Finding.Onset onset, String words) {
+        book.report(Finding.ofRelation(
+                Alarm.Kind.STEP,
+                watched.label(),
+                onset,
+                Double.NaN,
+                watched.unit(),
+                Alarm.Priority.NEXT_STOP,
+                watched.label() + words + ". No reference model is adopted yet, so the cause is not told"));
     }
 
     void clear() {

@@ -27,7 +27,7 @@ public final class Monitor {
                 DETECTORS * relations + sheet.channels().size());
         Dependence dependence = new Dependence(sheet);
         for (Group group : sheet.groups()) {
-            groups.add(new GroupMonitor(group, dependence.watched(group), budget, book, channels));
+            groups.add(new GroupMonitor(group, dependence.watched(group), budget, book, channels, clock));
         }
     }
 

@@ -12,6 +12,7 @@ import java.util.Arrays;
  */
 final class OutlierGate {
     static final int ROW = 8;
+    private static final int SHORT_ROW = 5;
     static final int WINDOW = 20;
     private static final int BURST = 3;
     /** Mean square of standardised readings between outliers above which the noise itself has grown; 1 when it has not. */
@@ -32,6 +33,7 @@ final class OutlierGate {
     private int next;
     private int row;
     private int rowSide;
+    private boolean gross;
     private long outliers;
     private boolean intermittent;
     private boolean confirmed;
@@ -54,6 +56,7 @@ final class OutlierGate {
         remember(side, t);
         row = side == 0 ? 0 : side == rowSide ? row + 1 : 1;
         rowSide = side;
+        gross = side != 0 && (row == 1 || gross) && Math.abs(t) > GROSS * bound;
         confirmed = row >= ROW;
         if (confirmed) {
             clear();
@@ -122,6 +125,14 @@ final class OutlierGate {
     /** Length of the row of outliers on one side that ends with the last reading. */
     int row() {
         return row;
+    }
+
+    /**
+     * Whether a row of outliers is open that may be a loose connection as well as a change: five on one side are a change, but
+     * of very large ones eight.
+     */
+    boolean unresolved() {
+        return row > 0 && row < (gross ? ROW : SHORT_ROW);
     }
 
     boolean intermittent() {

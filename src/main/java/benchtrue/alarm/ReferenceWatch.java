@@ -1,28 +1,35 @@
 package benchtrue.alarm;
 
+import org.jspecify.annotations.Nullable;
+
 /**
  * One relation against the adopted reference: z = (y − φᵀθₐ)/(s·√(1/w + φᵀCₐφ)), thinned until its neighbours are
- * independent, and its two-sided CUSUM. Unlike the innovations of the live model, z does not follow a drift.
+ * independent, its two-sided CUSUM and the likelihood-ratio bank. Unlike the innovations of the live model, z does not follow
+ * a drift. CUSUM and bank speak through one alarm.
  */
 final class ReferenceWatch {
-    private static final double CLIP = 4;
     private static final double LEVERAGE_MEMORY = 1.0 / 256;
     private static final double TESTABLE_LEVERAGE = 1;
     private static final int REDESIGN = 64;
-    private static final int QUIET = 256;
+    private static final int EVALUATE = 4;
 
     private final Watched watched;
-    private final AlarmBook book;
     private final Frozen frozen;
     private final int thinning;
     private final Cusum cusum = new Cusum();
+    private final Bank bank;
+    private final Suspense suspense;
+    private final DriftAlarm alarm;
+    private final double[] row;
     private CusumDesign design = new CusumDesign(0.5, Double.NaN);
+    private double bankLimit = Double.NaN;
     private double meanLeverage;
     private double z = Double.NaN;
+    private double error = Double.NaN;
     private double leverage = Double.NaN;
     private int untilDesign;
     private int untilNext;
-    private int quiet;
+    private int untilEvaluation = EVALUATE;
 
     /**
      * @param meanLeverage φᵀCₐφ to be expected at first
@@ -30,10 +37,15 @@ final class ReferenceWatch {
      */
     ReferenceWatch(Watched watched, AlarmBook book, Frozen frozen, double meanLeverage, int thinning) {
         this.watched = watched;
-        this.book = book;
         this.frozen = frozen;
         this.meanLeverage = meanLeverage;
         this.thinning = thinning;
+        int p = watched.size();
+        int q = watched.hasConstantTerm() ? p : p + 1;
+        bank = new Bank(widened(frozen.covariance, p, q), frozen.nu);
+        suspense = new Suspense(bank);
+        alarm = new DriftAlarm(watched, book, frozen, bank);
+        row = new double[q];
     }
 
     /**
@@ -46,68 +58,82 @@ final class ReferenceWatch {
      */
     record Frozen(double[] values, double[] covariance, double sd, double nu) {}
 
+    /** The offset, where it is a hypothesis of its own, is exactly 0 in the reference. */
+    private static double[] widened(double[] covariance, int p, int q) {
+        double[] wide = new double[q * q];
+        for (int i = 0; i < p; i++) {
+            System.arraycopy(covariance, i * p, wide, i * q, p);
+        }
+        return wide;
+    }
+
     static double clip(double z) {
-        return Math.max(-CLIP, Math.min(CLIP, z));
+        return Math.max(-Suspense.CLIP, Math.min(Suspense.CLIP, z));
     }
 
     /** Computes z for a row without testing it. */
     void predict(double[] phi, double response, double weight) {
         int p = frozen.values.length;
-        double error = response;
+        double difference = response;
         double quadratic = 0;
+        double root = Math.sqrt(weight);
+        row[row.length - 1] = root;
         for (int i = 0; i < p; i++) {
-            error -= phi[i] * frozen.values[i];
-            double row = 0;
+            difference -= phi[i] * frozen.values[i];
+            double sum = 0;
             for (int j = 0; j < p; j++) {
-                row += frozen.covariance[i * p + j] * phi[j];
+                sum += frozen.covariance[i * p + j] * phi[j];
             }
-            quadratic += phi[i] * row;
+            quadratic += phi[i] * sum;
+            row[i] = root * phi[i];
         }
         leverage = quadratic * weight;
-        z = error / (frozen.sd * Math.sqrt(1 / weight + quadratic));
+        error = difference * root / frozen.sd;
+        z = error / Math.sqrt(1 + leverage);
     }
 
-    /** Tests the row last predicted, if its turn has come. */
-    void test(long number, double time, double perReading) {
+    /**
+     * Tests the row last predicted, if its turn has come.
+     *
+     * @param outlier whether the live model holds it out as an isolated outlier
+     * @param doubt why nothing is to be told now, or null
+     */
+    void test(long number, double time, double perReading, boolean outlier, @Nullable String doubt) {
         if (!testable() || --untilNext > 0) {
             return;
         }
         untilNext = thinning;
         meanLeverage += LEVERAGE_MEMORY * (leverage - meanLeverage);
         if (--untilDesign <= 0) {
-            untilDesign = REDESIGN;
-            design = CusumDesign.of(perReading * thinning, meanLeverage, frozen.nu);
+            design(perReading);
         }
         cusum.step(clip(z), design.slack(), number);
-        judge(time);
+        take(number, time, outlier);
+        boolean beyond = cusum.beyond(design.limit());
+        if (--untilEvaluation <= 0 || beyond) {
+            untilEvaluation = EVALUATE;
+            bank.evaluate();
+            alarm.judge(time, cusum, beyond, bankLimit, doubt);
+        }
+        if (beyond && doubt == null) {
+            cusum.clear();
+        }
     }
 
-    private void judge(double time) {
-        quiet += thinning;
-        if (!cusum.beyond(design.limit())) {
-            if (quiet >= QUIET) {
-                book.normal(Alarm.Kind.STEP, watched.label(), null);
-            }
-            return;
+    /** Once an alarm stands the live model, which follows, knows better what an outlier is. */
+    private void take(long number, double time, boolean outlier) {
+        if (!alarm.stands()) {
+            suspense.add(row, error, z, time, number);
+        } else if (!outlier) {
+            bank.add(row, error, z, time, number);
         }
-        quiet = 0;
-        String text = watched.label() + ": has left the reference model since reading " + cusum.since();
-        Finding.Onset onset = new Finding.Onset(Double.NaN, Double.NaN, time, cusum.since());
-        book.report(new Finding(
-                Alarm.Kind.STEP,
-                watched.label(),
-                null,
-                null,
-                onset,
-                Double.NaN,
-                Double.NaN,
-                watched.unit(),
-                "not separable",
-                true,
-                false,
-                Alarm.Priority.ACT_NOW,
-                text));
-        cusum.clear();
+    }
+
+    private void design(double perReading) {
+        untilDesign = REDESIGN;
+        double share = perReading * thinning;
+        design = CusumDesign.of(share, meanLeverage, frozen.nu);
+        bankLimit = BankLimit.of(share, 2 * row.length + 1, frozen.nu);
     }
 
     /** False where the reference would have to be extrapolated. */
@@ -123,8 +149,19 @@ final class ReferenceWatch {
         return cusum.down() / design.limit();
     }
 
-    /** Starts afresh, as after an intermittent connection. */
-    void clear() {
+    /** Largest likelihood ratio as a fraction of its limit. */
+    double evidence() {
+        return alarm.most() / bankLimit;
+    }
+
+    /** Forgets the rows since a time in s: they were not what they seemed. */
+    void forgetSince(double time) {
         cusum.clear();
+        suspense.clear();
+        bank.forgetSince(time);
+    }
+
+    String label() {
+        return watched.label();
     }
 }

@@ -8,19 +8,24 @@ public final class RelationMonitor {
     private final Budget budget;
     private final AlarmBook book;
     private final Channels channels;
+    private final ClockWatch clock;
     private final OutlierGate gate;
     private final StudentLimit limit = new StudentLimit();
     private final LiveWatch live;
     private final double[] own;
     private @Nullable ReferenceWatch reference;
     private double bound = Double.NaN;
+    private double firstOut;
+    private long lastOut = Long.MIN_VALUE / 2;
+    private boolean objected;
     private String untested = "no reading yet";
 
-    RelationMonitor(Watched watched, Budget budget, AlarmBook book, Channels channels) {
+    RelationMonitor(Watched watched, Budget budget, AlarmBook book, Channels channels, ClockWatch clock) {
         this.watched = watched;
         this.budget = budget;
         this.book = book;
         this.channels = channels;
+        this.clock = clock;
         gate = new OutlierGate(watched.holdsOut());
         live = new LiveWatch(watched, budget, book);
         own = new double[watched.size()];
@@ -45,20 +50,38 @@ public final class RelationMonitor {
             double leverage) {
         Decision.HoldOut objection = channels.objection(watched.channels());
         if (objection != null) {
-            untested = objection.reason();
-            bound = Double.NaN;
+            object(objection.reason());
             return objection;
         }
+        objected = false;
         untested = whyNot(nu, leverage);
         bound = untested.isEmpty() ? limit.at(budget.perReading(), nu) : Double.NaN;
         Decision decision = gate.judge(t, bound);
-        tellIntermittent(number, time);
-        boolean quiet = !gate.intermittent() && !channels.unresolved(watched.channels());
-        if (untested.isEmpty() && decision instanceof Decision.Use) {
-            live.test(t, nu, number, time, reference == null && quiet);
+        double now = clock.running();
+        if (gate.out() && number - lastOut > OutlierGate.WINDOW) {
+            firstOut = now;
         }
-        testReference(number, time, phi, response, weight, quiet);
+        lastOut = gate.out() ? number : lastOut;
+        tellIntermittent(number, now);
+        if (gate.confirmedStep() && reference == null) {
+            live.tellStep(t, number, now);
+        }
+        if (untested.isEmpty() && decision instanceof Decision.Use) {
+            boolean quiet = !gate.intermittent() && !channels.unresolved(watched.channels());
+            live.test(t, nu, number, now, reference == null && quiet);
+        }
+        testReference(number, now, phi, response, weight, decision);
         return decision;
+    }
+
+    /** What a doubtful channel said since its trouble began has spoilt the tests against the reference. */
+    private void object(String reason) {
+        untested = reason;
+        bound = Double.NaN;
+        if (!objected && reference != null) {
+            reference.forgetSince(channels.troubleSince(watched.channels()));
+        }
+        objected = true;
     }
 
     private String whyNot(double nu, double leverage) {
@@ -74,25 +97,32 @@ public final class RelationMonitor {
         return Double.isNaN(budget.perReading()) ? "the interval of readings is not known yet" : "";
     }
 
-    private void tellIntermittent(long number, double time) {
-        if (gate.intermittent() && !book.stands(Alarm.Kind.INTERMITTENT, watched.label(), null)) {
-            book.report(
-                    Finding.ofRelation(
-                            Alarm.Kind.INTERMITTENT,
-                            watched.label(),
-                            Finding.Onset.at(time, number),
-                            Double.NaN,
-                            watched.unit(),
-                            Alarm.Priority.NEXT_STOP,
-                            watched.label()
-                                    + ": 3 or more outliers in 20 readings with good ones between: a loose connection?"
-                                    + " The estimates are held until 20 readings are good; make the rig safe, then reseat leads"));
-        } else if (!gate.intermittent() && book.stands(Alarm.Kind.INTERMITTENT, watched.label(), null)) {
+    private void tellIntermittent(long number, double now) {
+        boolean told = book.stands(Alarm.Kind.INTERMITTENT, watched.label(), null);
+        if (gate.intermittent() && !told) {
+            Finding.Onset onset = new Finding.Onset(firstOut, firstOut, now, number);
+            String text = watched.label() + ": 3 or more outliers in 20 readings with good ones between, since "
+                    + Words.number(firstOut)
+                    + " s: a loose connection? The estimates are held until 20 readings are good."
+                    + " Make the rig safe, then reseat leads";
+            book.report(Finding.ofRelation(
+                    Alarm.Kind.INTERMITTENT,
+                    watched.label(),
+                    onset,
+                    Double.NaN,
+                    watched.unit(),
+                    Alarm.Priority.NEXT_STOP,
+                    text));
+            if (reference != null) {
+                reference.forgetSince(firstOut);
+            }
+        } else if (!gate.intermittent() && told) {
             book.normal(Alarm.Kind.INTERMITTENT, watched.label(), null);
         }
     }
 
-    private void testReference(long number, double time, double[] phi, double response, double weight, boolean quiet) {
+    private void testReference(
+            long number, double now, double[] phi, double response, double weight, Decision decision) {
         ReferenceWatch watch = reference;
         if (watch == null) {
             return;
@@ -101,11 +131,17 @@ public final class RelationMonitor {
             own[i] = phi[watched.places()[i]];
         }
         watch.predict(own, response, weight);
-        if (!quiet) {
-            watch.clear();
-        } else {
-            watch.test(number, time, budget.perReading());
+        if (!gate.intermittent()) {
+            watch.test(number, now, budget.perReading(), decision instanceof Decision.HoldOut, doubt());
         }
+    }
+
+    /** What may yet turn out to be no change of the rig, so that no cause is told before it has. */
+    private @Nullable String doubt() {
+        if (gate.unresolved()) {
+            return "outliers that may be a loose connection";
+        }
+        return channels.unresolved(watched.channels()) ? "a channel repeats its value and may be stuck" : null;
     }
 
     /** Takes its part of the group's model as its reference. */
@@ -123,6 +159,7 @@ public final class RelationMonitor {
         }
         double nu = model.degreesOfFreedom()[relation];
         ReferenceWatch.Frozen frozen = new ReferenceWatch.Frozen(values, covariance, sd, nu);
+        book.normal(Alarm.Kind.STEP, watched.label(), null);
         reference = new ReferenceWatch(watched, book, frozen, p / model.effectiveReadings(), thinning(model));
     }
 
@@ -177,6 +214,22 @@ public final class RelationMonitor {
 
     public double referenceDown() {
         return reference == null ? Double.NaN : reference.down();
+    }
+
+    /** Largest likelihood ratio of a change against the reference as a fraction of its limit; NaN while there is none. */
+    public double evidence() {
+        return reference == null ? Double.NaN : reference.evidence();
+    }
+
+    /** Why the last reading was not tested against the reference, or empty. */
+    public String referenceUntested() {
+        if (reference == null) {
+            return "no reference model is adopted yet";
+        }
+        if (gate.intermittent()) {
+            return "intermittent";
+        }
+        return reference.testable() ? "" : "new operating point: the reference would be extrapolated";
     }
 
     /** Rows beyond their bound so far. */

@@ -3,7 +3,7 @@ package benchtrue.alarm;
 import java.util.Arrays;
 
 /**
- * Sums over readings that a change is judged by, for q regressors φ and an error e in standard deviations: n, Σz², Σφφᵀ,
+ * Sums over readings that a change is judged by, for q regressors φ and an error e in standard deviations: n, Σz², Σe, Σφφᵀ,
  * Σvφφᵀ, Σv²φᵢ², Σφe and Σvφe, with v the time in s since {@link #start}. Matrices are q×q, row by row.
  */
 final class Sums {
@@ -15,6 +15,7 @@ final class Sums {
     final double[] timedScores;
     long count;
     double squares;
+    double errors;
     double start;
     long firstReading;
 
@@ -36,6 +37,7 @@ final class Sums {
         Arrays.fill(timedScores, 0);
         count = 0;
         squares = 0;
+        errors = 0;
         start = from;
         firstReading = reading;
     }
@@ -54,6 +56,7 @@ final class Sums {
             timedScores[i] += v * f * error;
         }
         squares += z * z;
+        errors += error;
         count++;
     }
 
@@ -70,6 +73,7 @@ final class Sums {
             products[at] += earlier.products[at];
         }
         squares += earlier.squares;
+        errors += earlier.errors;
         count += earlier.count;
         start = earlier.start;
         firstReading = earlier.firstReading;
@@ -83,6 +87,7 @@ final class Sums {
         System.arraycopy(other.timedScores, 0, timedScores, 0, q);
         count = other.count;
         squares = other.squares;
+        errors = other.errors;
         start = other.start;
         firstReading = other.firstReading;
     }

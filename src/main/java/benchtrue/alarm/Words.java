@@ -23,6 +23,17 @@ final class Words {
                 .toPlainString();
     }
 
+    /** A value with its sign and ± U, both to the second significant digit of U (GUM 7.2.6). */
+    static String measured(double value, double expanded) {
+        if (!(expanded > 0) || !(Math.abs(value) <= Double.MAX_VALUE)) {
+            return number(value);
+        }
+        int places = Math.min(12, 1 - (int) Math.floor(Math.log10(expanded)));
+        return places < 0
+                ? number(value) + " ± " + number(expanded)
+                : String.format(Locale.ROOT, "%+." + places + "f ± %." + places + "f", value, expanded);
+    }
+
     /** The unit with a blank before it; nothing for a plain number. */
     static String unit(String symbol) {
         return symbol.isEmpty() ? "" : " " + symbol;

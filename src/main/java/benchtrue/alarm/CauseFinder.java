@@ -1,0 +1,179 @@
+package benchtrue.alarm;
+
+import benchtrue.estimate.Quantiles;
+import java.util.ArrayList;
+import java.util.List;
+
+/**
+ * Which cause the evidence is for, and whether it may be named. It is provisional until it leads the next by more than 10
+ * (then it was right in all but one or two of two hundred), and while a change of several unknowns at once explains much more
+ * than it does.
+ */
+final class CauseFinder {
+    static final double LEAD = 10;
+    /** 99.97 % point of χ² with two degrees of freedom: by so much several unknowns together must explain more than one. */
+    private static final double TOGETHER = 16;
+    /** Of ℓ, for an interval of the onset at 95 %. */
+    private static final double INTERVAL = 3.84;
+
+    private static final double SAME = 0.95;
+    private static final double RIDGE = 1e-9;
+
+    private final Bank bank;
+    private final ReferenceWatch.Frozen frozen;
+    private final double coverage;
+    private final int q;
+    private final double[] m;
+    private final double[] g;
+    private final double[] solved;
+    private final Bank.Interval interval = new Bank.Interval();
+
+    CauseFinder(Bank bank, ReferenceWatch.Frozen frozen) {
+        this.bank = bank;
+        this.frozen = frozen;
+        coverage = Quantiles.coverageFactor(frozen.nu());
+        q = bank.regressors();
+        m = new double[q * q];
+        g = new double[q];
+        solved = new double[q * q];
+    }
+
+    /** Largest ℓ of all causes. */
+    double most() {
+        double most = 0;
+        for (int i = 0; i <= q; i++) {
+            most = Math.max(most, bank.evidence(i).ratio);
+        }
+        return most;
+    }
+
+    int leader() {
+        int leader = 0;
+        for (int i = 1; i <= q; i++) {
+            if (bank.evidence(i).ratio > bank.evidence(leader).ratio) {
+                leader = i;
+            }
+        }
+        return leader;
+    }
+
+    /** By how much the leader leads. */
+    double ahead() {
+        return lead(leader());
+    }
+
+    /** @param now in s */
+    Cause find(double now) {
+        int leader = leader();
+        Evidence evidence = bank.evidence(leader);
+        List<Integer> rivals = rivals(leader);
+        double lead = lead(leader);
+        boolean noise = leader == q;
+        boolean together = !noise && together(leader, evidence, now);
+        boolean gain = !noise && gain(leader);
+        bank.interval(leader, INTERVAL, interval);
+        Sums since = bank.sumsSince(evidence.onset);
+        double count = since == null ? Double.NaN : since.count;
+        return new Cause(
+                leader,
+                evidence.ramp,
+                evidence.ratio,
+                lead,
+                lead > LEAD && !together,
+                rivals,
+                tellable(leader, rivals),
+                together,
+                gain,
+                new Finding.Onset(evidence.onset, interval.from, interval.to, evidence.onsetReading),
+                noise ? Math.sqrt(evidence.score) : delta(evidence, now),
+                noise ? Math.sqrt(evidence.score) : frozen.sd() * delta(evidence, now),
+                noise ? coverage * Math.sqrt(evidence.score / (2 * count)) : frozen.sd() * spread(evidence, now),
+                since == null ? Double.NaN : frozen.sd() * since.errors / count,
+                coverage * frozen.sd() / Math.sqrt(count));
+    }
+
+    /** Change now in units of s: of a ramp as far as it has come. */
+    private static double delta(Evidence evidence, double now) {
+        return evidence.score / evidence.information * (evidence.ramp ? now - evidence.onset : 1);
+    }
+
+    private double spread(Evidence evidence, double now) {
+        return coverage / Math.sqrt(evidence.information) * (evidence.ramp ? now - evidence.onset : 1);
+    }
+
+    private List<Integer> rivals(int leader) {
+        List<Integer> rivals = new ArrayList<>(List.of(leader));
+        for (int i = 0; i <= q; i++) {
+            if (i != leader && bank.evidence(i).ratio >= bank.evidence(leader).ratio - LEAD) {
+                rivals.add(i);
+            }
+        }
+        return List.copyOf(rivals);
+    }
+
+    /** Whether the regressors of the rivals are no more than 95 % the same; on the sums of {@link #together}. */
+    private boolean tellable(int leader, List<Integer> rivals) {
+        if (leader == q) {
+            return true;
+        }
+        for (int i : rivals) {
+            boolean unknown = i != leader && i < q;
+            double common = unknown ? m[leader * q + i] : 0;
+            if (unknown && common * common > SAME * m[leader * q + leader] * m[i * q + i]) {
+                return false;
+            }
+        }
+        return true;
+    }
+
+    private double lead(int leader) {
+        double next = 0;
+        for (int i = 0; i <= q; i++) {
+            next = i == leader ? next : Math.max(next, bank.evidence(i).ratio);
+        }
+        return bank.evidence(leader).ratio - next;
+    }
+
+    /** For a ramp over its last third, in which it is much like a step. */
+    private boolean together(int leader, Evidence evidence, double now) {
+        double from = evidence.ramp ? now - (now - evidence.onset) / 3 : evidence.onset;
+        if (bank.sumsSince(from) == null) {
+            return false;
+        }
+        bank.joint(m, g);
+        double one = m[leader * q + leader] > 0 ? g[leader] * g[leader] / m[leader * q + leader] : 0;
+        return all() - one > TOGETHER;
+    }
+
+    /** gᵀM⁻¹g; directions in which nothing is known count for nothing. */
+    private double all() {
+        System.arraycopy(m, 0, solved, 0, m.length);
+        for (int i = 0; i < q; i++) {
+            double own = m[i * q + i];
+            solved[i * q + i] = own > 0 ? own * (1 + RIDGE) : 1;
+        }
+        Symmetric.invert(solved, q);
+        double sum = 0;
+        for (int i = 0; i < q; i++) {
+            for (int j = 0; j < q; j++) {
+                sum += g[i] * solved[i * q + j] * g[j];
+            }
+        }
+        return sum;
+    }
+
+    /** Whether δ = ε·θₐ, the same factor for all, does better than the leader; on the sums of {@link #together}. */
+    private boolean gain(int leader) {
+        double score = 0;
+        double information = 0;
+        int p = frozen.values().length;
+        for (int i = 0; i < p; i++) {
+            score += frozen.values()[i] * g[i];
+            for (int j = 0; j < p; j++) {
+                information += frozen.values()[i] * m[i * q + j] * frozen.values()[j];
+            }
+        }
+        double one = g[leader] * g[leader] / m[leader * q + leader];
+        return p > 1 && score * score / information > one + LEAD;
+    }
+}

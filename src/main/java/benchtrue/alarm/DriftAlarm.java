@@ -1,0 +1,113 @@
+package benchtrue.alarm;
+
+import org.jspecify.annotations.Nullable;
+
+/** The one alarm of a relation against its reference: raised by CUSUM or bank, brought up to date, returned to normal. */
+final class DriftAlarm {
+    /** Without news the alarm is brought up to date after so many judgements. */
+    private static final int REFRESH = 16;
+    /** A change is over when the readings since some time are e^12.5 times likelier without it. */
+    private static final double OVER = 25;
+
+    private final Watched watched;
+    private final AlarmBook book;
+    private final Bank bank;
+    private final CauseFinder finder;
+    private final DriftWords words;
+    private @Nullable Cause told;
+    private double most;
+    private int untilRefresh;
+    private boolean stands;
+
+    DriftAlarm(Watched watched, AlarmBook book, ReferenceWatch.Frozen frozen, Bank bank) {
+        this.watched = watched;
+        this.book = book;
+        this.bank = bank;
+        finder = new CauseFinder(bank, frozen);
+        words = new DriftWords(watched, frozen);
+    }
+
+    /**
+     * To be called after each evaluation of the bank.
+     *
+     * @param byCusum whether the CUSUM is beyond its limit
+     * @param doubt why nothing is to be told now, or null
+     */
+    void judge(double time, Cusum cusum, boolean byCusum, double limit, @Nullable String doubt) {
+        most = finder.most();
+        if (doubt != null) {
+            return;
+        }
+        if (stands && over(time)) {
+            stands = false;
+            told = null;
+            book.normal(Alarm.Kind.STEP, watched.label(), null);
+            bank.clear();
+            cusum.clear();
+            return;
+        }
+        boolean beyond = most > limit;
+        if (!beyond && !(byCusum && !stands)) {
+            return;
+        }
+        if (!stands || --untilRefresh <= 0 || news(limit)) {
+            untilRefresh = REFRESH;
+            tell(time, limit, cusum.since());
+        }
+    }
+
+    /** Whether the leader changed, or leads enough for the first time. */
+    private boolean news(double limit) {
+        Cause before = told;
+        if (before == null || finder.leader() != before.leader()) {
+            return true;
+        }
+        return !before.named() && finder.most() > limit && finder.ahead() > CauseFinder.LEAD && !before.together();
+    }
+
+    private void tell(double time, double limit, long cusumSince) {
+        Cause cause = sticky(finder.find(time));
+        told = cause;
+        stands = true;
+        book.report(words.finding(cause, limit, time, cusumSince));
+    }
+
+    /** A cause that was named stays until another may be named; an onset that was known better stays, too. */
+    private Cause sticky(Cause found) {
+        Cause before = told;
+        if (before == null || !before.named()) {
+            return found;
+        }
+        if (found.leader() != before.leader()) {
+            return found.named() ? found : before;
+        }
+        if (found.together()) {
+            return found;
+        }
+        return found.asNamed(keptOnset(before, found));
+    }
+
+    /** The stretches grow longer as they grow older, and the oldest are forgotten. */
+    private Finding.Onset keptOnset(Cause before, Cause found) {
+        Finding.Onset old = before.onset();
+        Finding.Onset now = found.onset();
+        boolean beyondMemory = old.from() < bank.oldest();
+        boolean sharper = before.ramp() == found.ramp() && old.to() - old.from() <= now.to() - now.from();
+        boolean agrees = old.from() <= now.to() && now.from() <= old.to();
+        return beyondMemory || (sharper && agrees) ? old : now;
+    }
+
+    /** Whether the readings since some time speak against the change that was told. */
+    private boolean over(double time) {
+        Cause cause = told;
+        return cause != null && bank.against(cause, time) > OVER;
+    }
+
+    boolean stands() {
+        return stands;
+    }
+
+    double most() {
+        return most;
+    }
+}
