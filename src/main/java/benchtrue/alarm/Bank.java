@@ -39,6 +39,7 @@ final class Bank {
     private final Evidence[] near;
     private final Evidence[] far;
     private final Evidence[] one;
+    private final double[] ratios = new double[Onsets.most()];
     private final double[] inverse;
     private final double[] explained;
     private int listed;
@@ -165,27 +166,33 @@ final class Bank {
         }
     }
 
-    /** Looks at one cause at all onsets, oldest last, and tells how far back the evidence stays within a distance of its best. */
+    /**
+     * Between which times the onset of a cause lies: how far the evidence stays within a distance of its best, and to the next
+     * onset beyond on either side.
+     */
     void interval(int cause, double within, Interval into) {
-        double best = evidence(cause).ratio;
-        into.from = Double.NaN;
-        into.to = Double.NaN;
         listed = onsets.list(list);
-        double newer = Double.NaN;
-        boolean inside = false;
+        double best = 0;
         for (int k = 0; k < listed; k++) {
-            clear(one);
-            consider(k, one);
-            boolean close = one[cause].ratio >= best - within;
-            if (close && Double.isNaN(into.to)) {
-                into.to = Double.isNaN(newer) ? since.start : newer;
-            }
-            if (close || inside) {
-                into.from = since.start;
-            }
-            inside = close;
-            newer = since.start;
+            ratios[k] = alone(cause, k);
+            best = Math.max(best, ratios[k]);
         }
+        int newest = 0;
+        while (newest < listed && ratios[newest] < best - within) {
+            newest++;
+        }
+        int oldest = listed - 1;
+        while (oldest > newest && ratios[oldest] < best - within) {
+            oldest--;
+        }
+        into.from = listed == 0 ? Double.NaN : list[Math.min(listed - 1, oldest + 1)].start;
+        into.to = listed == 0 ? Double.NaN : list[Math.max(0, newest - 1)].start;
+    }
+
+    private double alone(int cause, int onset) {
+        clear(one);
+        consider(onset, one);
+        return one[cause].ratio;
     }
 
     /**

@@ -36,10 +36,10 @@ record Cause(
         double shift,
         double shiftU) {
 
-    /** The same cause, named, with an onset that was known better. */
-    Cause asNamed(Finding.Onset better) {
+    /** The same cause with an onset that was known better. */
+    Cause with(boolean nowNamed, Finding.Onset better) {
         return new Cause(
-                leader, ramp, ratio, lead, true, rivals, tellable, together, gain, better, change, size, sizeU, shift,
-                shiftU);
+                leader, ramp, ratio, lead, nowNamed, rivals, tellable, together, gain, better, change, size, sizeU,
+                shift, shiftU);
     }
 }

@@ -75,16 +75,14 @@ final class DriftAlarm {
     /** A cause that was named stays until another may be named; an onset that was known better stays, too. */
     private Cause sticky(Cause found) {
         Cause before = told;
-        if (before == null || !before.named()) {
+        if (before == null) {
             return found;
         }
         if (found.leader() != before.leader()) {
-            return found.named() ? found : before;
+            return before.named() && !found.named() ? before : found;
         }
-        if (found.together()) {
-            return found;
-        }
-        return found.asNamed(keptOnset(before, found));
+        boolean named = found.named() || (before.named() && !found.together());
+        return found.with(named, keptOnset(before, found));
     }
 
     /** The stretches grow longer as they grow older, and the oldest are forgotten. */
