@@ -24,8 +24,15 @@ final class Bank {
 
     private static final int ALL = 4;
 
+    private static final int QUIET = 256;
+    /** Four times the mean of χ² for each degree of freedom. */
+    private static final double CALM = 4;
+
     /** What is left of a sum after rounding. */
     private static final double NOTHING = 1e-12;
+
+    /** By so much ℓ of a ramp must exceed that of a step: 95 % point of χ² with one degree of freedom. */
+    private static final double RAMP = 3.84;
 
     /** Below it a mean square is no evidence: saves two logarithms. */
     private static final double NOISE_WORTH_IT = 4;
@@ -55,9 +62,9 @@ final class Bank {
         this.nu = nu;
         onsets = new Onsets(q);
         since = new Sums(q);
-        near = Stream.generate(Evidence::new).limit(q + 1).toArray(Evidence[]::new);
-        one = Stream.generate(Evidence::new).limit(q + 1).toArray(Evidence[]::new);
-        far = Stream.generate(Evidence::new).limit(q + 1).toArray(Evidence[]::new);
+        near = Stream.generate(Evidence::new).limit(2 * q + 1).toArray(Evidence[]::new);
+        one = Stream.generate(Evidence::new).limit(2 * q + 1).toArray(Evidence[]::new);
+        far = Stream.generate(Evidence::new).limit(2 * q + 1).toArray(Evidence[]::new);
         inverse = new double[q * q];
         explained = new double[q];
     }
@@ -81,6 +88,11 @@ final class Bank {
         untilAll = 0;
         clear(near);
         clear(far);
+    }
+
+    /** Keeps the best onset of a cause among those considered, however old it grows. */
+    void keep(int cause) {
+        onsets.keep(evidence(cause).onset);
     }
 
     /** Looks at all hypotheses at the onsets of the last hundred readings, and at times at all of them. */
@@ -110,9 +122,8 @@ final class Bank {
         extend(k);
         prepare();
         for (int i = 0; i < q; i++) {
-            Evidence cause = evidence[i];
-            offer(cause, false, since.products, i * q, since.products[i * q + i], since.scores[i]);
-            offer(cause, true, since.timed, i * q, since.timedTwice[i], since.timedScores[i]);
+            offer(evidence[i], false, since.products, i * q, since.products[i * q + i], since.scores[i]);
+            offer(evidence[q + 1 + i], true, since.timed, i * q, since.timedTwice[i], since.timedScores[i]);
         }
         noise(evidence[q]);
     }
@@ -139,6 +150,35 @@ final class Bank {
         }
         prepare();
         return since;
+    }
+
+    /** Whether the last 256 readings or more, all since the onset, have neither moved nor grown noisier. */
+    boolean quiet(double onset, double[] m, double[] g) {
+        listed = onsets.list(list);
+        for (int k = 0; k < listed && list[k].start > onset; k++) {
+            extend(k);
+            if (since.count >= QUIET) {
+                prepare();
+                joint(m, g);
+                one[q].clear();
+                noise(one[q]);
+                return Symmetric.quadratic(m, g) < CALM * q && one[q].ratio < CALM;
+            }
+        }
+        return false;
+    }
+
+    /** ℓ of a step of all unknowns at once, each by its own amount, at its best onset: gᵀM⁻¹g. */
+    double together(double[] m, double[] g) {
+        double most = 0;
+        listed = onsets.list(list);
+        for (int k = 0; k < listed; k++) {
+            extend(k);
+            prepare();
+            joint(m, g);
+            most = Math.max(most, Symmetric.quadratic(m, g));
+        }
+        return most;
     }
 
     /**
@@ -192,7 +232,7 @@ final class Bank {
     private double alone(int cause, int onset) {
         clear(one);
         consider(onset, one);
-        return one[cause].ratio;
+        return cause == q ? one[q].ratio : Math.max(one[cause].ratio, one[q + 1 + cause].ratio);
     }
 
     /**
@@ -273,8 +313,17 @@ final class Bank {
         }
     }
 
-    /** For each regressor at its best onset; behind them for the noise. */
+    /** For each regressor at its best onset, and behind them for the noise. A ramp must fit clearly better than a step. */
     Evidence evidence(int i) {
+        Evidence step = better(i);
+        if (i == q) {
+            return step;
+        }
+        Evidence ramp = better(q + 1 + i);
+        return ramp.ratio > step.ratio + RAMP ? ramp : step;
+    }
+
+    private Evidence better(int i) {
         return near[i].ratio >= far[i].ratio ? near[i] : far[i];
     }
 

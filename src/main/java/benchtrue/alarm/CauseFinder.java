@@ -11,13 +11,15 @@ import java.util.List;
  */
 final class CauseFinder {
     static final double LEAD = 10;
-    /** 99.97 % point of χ² with two degrees of freedom: by so much several unknowns together must explain more than one. */
-    private static final double TOGETHER = 16;
-    /** Of ℓ, for an interval of the onset at 95 %. */
-    private static final double INTERVAL = 3.84;
+    /** Beyond the 99.9 % point of χ² with three degrees of freedom, for the search over onsets: by so much several unknowns together must explain more than one. */
+    private static final double TOGETHER = 20;
+    /**
+     * Of ℓ, for an interval of the onset at 95 %: where the time of a change is sought, 2·ln of the likelihood at the best time
+     * exceeds that at the true one by more than x with a chance of 1 − (1 − e^(−x/2))² (Siegmund 1988).
+     */
+    private static final double INTERVAL = 7.35;
 
     private static final double SAME = 0.95;
-    private static final double RIDGE = 1e-9;
 
     private final Bank bank;
     private final ReferenceWatch.Frozen frozen;
@@ -25,7 +27,6 @@ final class CauseFinder {
     private final int q;
     private final double[] m;
     private final double[] g;
-    private final double[] solved;
     private final Bank.Interval interval = new Bank.Interval();
 
     CauseFinder(Bank bank, ReferenceWatch.Frozen frozen) {
@@ -35,7 +36,6 @@ final class CauseFinder {
         q = bank.regressors();
         m = new double[q * q];
         g = new double[q];
-        solved = new double[q * q];
     }
 
     /** Largest ℓ of all causes. */
@@ -62,6 +62,11 @@ final class CauseFinder {
         return lead(leader());
     }
 
+    /** Whether some hundreds of readings since the onset, the last ones, show nothing of any change. */
+    boolean quiet(double onset) {
+        return bank.quiet(onset, m, g);
+    }
+
     /** @param now in s */
     Cause find(double now) {
         int leader = leader();
@@ -69,7 +74,8 @@ final class CauseFinder {
         List<Integer> rivals = rivals(leader);
         double lead = lead(leader);
         boolean noise = leader == q;
-        boolean together = !noise && together(leader, evidence, now);
+        boolean together = !noise && bank.together(m, g) - evidence.ratio > TOGETHER;
+        sum(evidence, now);
         boolean gain = !noise && gain(leader);
         bank.interval(leader, INTERVAL, interval);
         Sums since = bank.sumsSince(evidence.onset);
@@ -111,7 +117,7 @@ final class CauseFinder {
         return List.copyOf(rivals);
     }
 
-    /** Whether the regressors of the rivals are no more than 95 % the same; on the sums of {@link #together}. */
+    /** Whether the regressors of the rivals are no more than 95 % the same; on the sums of {@link #sum}. */
     private boolean tellable(int leader, List<Integer> rivals) {
         if (leader == q) {
             return true;
@@ -134,35 +140,13 @@ final class CauseFinder {
         return bank.evidence(leader).ratio - next;
     }
 
-    /** For a ramp over its last third, in which it is much like a step. */
-    private boolean together(int leader, Evidence evidence, double now) {
-        double from = evidence.ramp ? now - (now - evidence.onset) / 3 : evidence.onset;
-        if (bank.sumsSince(from) == null) {
-            return false;
-        }
+    /** Sums for what is asked of several unknowns at once: of a ramp over its last third, in which it is much like a step. */
+    private void sum(Evidence evidence, double now) {
+        bank.sumsSince(evidence.ramp ? now - (now - evidence.onset) / 3 : evidence.onset);
         bank.joint(m, g);
-        double one = m[leader * q + leader] > 0 ? g[leader] * g[leader] / m[leader * q + leader] : 0;
-        return all() - one > TOGETHER;
     }
 
-    /** gᵀM⁻¹g; directions in which nothing is known count for nothing. */
-    private double all() {
-        System.arraycopy(m, 0, solved, 0, m.length);
-        for (int i = 0; i < q; i++) {
-            double own = m[i * q + i];
-            solved[i * q + i] = own > 0 ? own * (1 + RIDGE) : 1;
-        }
-        Symmetric.invert(solved, q);
-        double sum = 0;
-        for (int i = 0; i < q; i++) {
-            for (int j = 0; j < q; j++) {
-                sum += g[i] * solved[i * q + j] * g[j];
-            }
-        }
-        return sum;
-    }
-
-    /** Whether δ = ε·θₐ, the same factor for all, does better than the leader; on the sums of {@link #together}. */
+    /** Whether δ = ε·θₐ, the same factor for all, does better than the leader; on the sums of {@link #sum}. */
     private boolean gain(int leader) {
         double score = 0;
         double information = 0;

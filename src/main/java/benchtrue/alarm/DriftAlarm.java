@@ -69,36 +69,43 @@ final class DriftAlarm {
         Cause cause = sticky(finder.find(time));
         told = cause;
         stands = true;
+        bank.keep(cause.leader());
         book.report(words.finding(cause, limit, time, cusumSince));
     }
 
-    /** A cause that was named stays until another may be named; an onset that was known better stays, too. */
+    /** A cause that was named stays until another may be named or one alone does not explain it; an onset that was known better stays, too. */
     private Cause sticky(Cause found) {
         Cause before = told;
-        if (before == null) {
+        if (before == null || found.together()) {
             return found;
         }
         if (found.leader() != before.leader()) {
             return before.named() && !found.named() ? before : found;
         }
-        boolean named = found.named() || (before.named() && !found.together());
-        return found.with(named, keptOnset(before, found));
+        return found.with(found.named() || before.named(), keptOnset(before, found));
     }
 
-    /** The stretches grow longer as they grow older, and the oldest are forgotten. */
+    /**
+     * When a step began shows in the readings next to it, which are told apart the better the younger they are: what was known
+     * when the cause was named stays, unless it proves wrong. A ramp is dated better as it grows.
+     */
     private Finding.Onset keptOnset(Cause before, Cause found) {
         Finding.Onset old = before.onset();
         Finding.Onset now = found.onset();
         boolean beyondMemory = old.from() < bank.oldest();
-        boolean sharper = before.ramp() == found.ramp() && old.to() - old.from() <= now.to() - now.from();
         boolean agrees = old.from() <= now.to() && now.from() <= old.to();
-        return beyondMemory || (sharper && agrees) ? old : now;
+        return beyondMemory || (before.named() && before.ramp() == found.ramp() && !found.ramp() && agrees) ? old : now;
     }
 
-    /** Whether the readings since some time speak against the change that was told. */
+    /** Whether the readings since some time speak against the change; while its cause is not known, against any change. */
     private boolean over(double time) {
         Cause cause = told;
-        return cause != null && bank.against(cause, time) > OVER;
+        if (cause == null) {
+            return false;
+        }
+        return cause.named()
+                ? bank.against(cause, time) > OVER
+                : finder.quiet(cause.onset().time());
     }
 
     boolean stands() {

@@ -12,6 +12,7 @@ final class Entry {
     private boolean acknowledged;
     private double shelvedUntil = Double.POSITIVE_INFINITY;
     private double spokenSize;
+    private String spokenCause = "";
     private int count = 1;
     private String comment = "";
 
@@ -21,6 +22,7 @@ final class Entry {
         raised = time;
         raisedReading = reading;
         spokenSize = Math.abs(finding.size());
+        spokenCause = finding.provisional() ? "" : words(finding);
     }
 
     /** @return the word for the log, or null where nothing need be said */
@@ -32,12 +34,17 @@ final class Entry {
             stands = true;
             return speak();
         }
-        boolean doubled = Math.abs(found.size()) >= 2 * spokenSize && spokenSize > 0;
-        if (!found.provisional() && before.provisional()) {
+        if (!found.provisional() && !spokenCause.equals(words(found))) {
+            spokenCause = words(found);
             spokenSize = Math.abs(found.size());
             return "cause";
         }
+        boolean doubled = !found.provisional() && Math.abs(found.size()) >= 2 * spokenSize && spokenSize > 0;
         return doubled || (found.beyondLimit() && !before.beyondLimit()) ? speak() : null;
+    }
+
+    private static String words(Finding found) {
+        return found.kind() == Alarm.Kind.NOISE ? found.kind().word() : String.valueOf(found.cause());
     }
 
     private @Nullable String speak() {

@@ -19,6 +19,7 @@ final class Onsets {
 
     private final int[] filled = new int[LENGTHS];
     private Sums open;
+    private double kept = Double.NaN;
 
     Onsets(int regressors) {
         for (Sums[] row : stretches) {
@@ -54,20 +55,29 @@ final class Onsets {
 
     private void merge(int length) {
         Sums[] row = stretches[length];
-        filled[length] = EACH - 1;
-        if (length + 1 < LENGTHS) {
+        if (length + 1 == LENGTHS) {
+            filled[length] = EACH;
+        } else if (row[EACH - 1].start == kept) {
+            filled[length] = EACH;
+            row[EACH] = push(length + 1, row[EACH]);
+        } else {
+            filled[length] = EACH - 1;
             Sums both = row[EACH - 1];
             both.reach(row[EACH]);
             row[EACH - 1] = row[EACH];
             row[EACH] = push(length + 1, both);
-        } else {
-            filled[length] = EACH;
         }
+    }
+
+    /** From now on stretches are not merged over this onset, in s. */
+    void keep(double onset) {
+        kept = onset;
     }
 
     void clear() {
         Arrays.fill(filled, 0);
         open.count = 0;
+        kept = Double.NaN;
     }
 
     /** Forgets the stretches that reach beyond this time; each ends where the next newer one starts. */

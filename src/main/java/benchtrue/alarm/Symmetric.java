@@ -7,6 +7,8 @@ final class Symmetric {
 
     private static final double SINGULAR = 1e-12;
 
+    private static final double RIDGE = 1e-9;
+
     private Symmetric() {}
 
     /** a ← a⁻¹ by sweeping each pivot (Goodnight 1979): one division each. */
@@ -29,6 +31,28 @@ final class Symmetric {
             }
             a[pivotRow + k] = d;
         }
+    }
+
+    /**
+     * gᵀM⁻¹g, in which directions that M knows nothing of count for nothing.
+     *
+     * @param m positive semidefinite, overwritten
+     * @param g read
+     */
+    static double quadratic(double[] m, double[] g) {
+        int q = g.length;
+        for (int i = 0; i < q; i++) {
+            double own = m[i * q + i];
+            m[i * q + i] = own > 0 ? own * (1 + RIDGE) : 1;
+        }
+        invert(m, q);
+        double sum = 0;
+        for (int i = 0; i < q; i++) {
+            for (int j = 0; j < q; j++) {
+                sum += g[i] * m[i * q + j] * g[j];
+            }
+        }
+        return sum;
     }
 
     /**

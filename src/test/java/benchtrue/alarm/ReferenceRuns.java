@@ -5,7 +5,7 @@ import java.util.SplittableRandom;
 
 /**
  * Runs of y = a·x + b·z + c against a frozen reference, as a rig is run: x and z stay for a while, then move. The noise has
- * the standard deviation 1; the reference rests on readings of its own, so that it is wrong by as much as it says.
+ * the standard deviation 1; the reference rests on readings of its own with dwells of 50, so that it is wrong by as much as it says.
  */
 final class ReferenceRuns {
     static final double[] TRUTH = {2, -1, 5};
@@ -15,20 +15,21 @@ final class ReferenceRuns {
     final ReferenceWatch watch;
     final double[] now = TRUTH.clone();
     double noise = 1;
+    double outlier;
     double correlation;
     private final double perReading;
     private final double[] phi = {0, 0, 1};
-    private final int dwell;
+    private int dwell = 50;
     private double last;
     private long number;
 
     ReferenceRuns(long seed, int referenceReadings, int dwell, double correlation, double perReading) {
         random = new SplittableRandom(seed);
-        this.dwell = dwell;
         this.correlation = correlation;
         this.perReading = perReading;
         int thinning = Autocorrelation.thinning(correlation);
         watch = new ReferenceWatch(Rig.plane(), book, reference(referenceReadings), 3.0 / referenceReadings, thinning);
+        this.dwell = dwell;
     }
 
     /** Ordinary least squares over readings made before the run. */
@@ -68,15 +69,15 @@ final class ReferenceRuns {
             phi[1] = 4 * random.nextDouble() - 2;
         }
         last = correlation * last + Math.sqrt(1 - correlation * correlation) * random.nextGaussian();
-        return now[0] * phi[0] + now[1] * phi[1] + now[2] + noise * last;
+        return now[0] * phi[0] + now[1] * phi[1] + now[2] + noise * last + outlier;
     }
 
     /** One reading, once a second, into the watch. */
     void read() {
         double y = next();
-        book.at(number, number);
+        book.at((double) number, number);
         watch.predict(phi, y, 1);
-        watch.test(number, number, perReading, false, null);
+        watch.test(number, (double) number, perReading, false, null);
     }
 
     void read(long readings) {
