@@ -24,13 +24,11 @@ final class LackOfFitTest {
         }
         double[] theta = qr.fit().estimates();
         LackOfFit test = new LackOfFit(1);
-        // First every other reading, then the rest: so that levels are left and come back to.
-        for (int start = 0; start < 2; start++) {
-            for (int i = start; i < X.length; i += 2) {
-                test.add(new double[] {X[i]}, Y[i] - theta[0] - theta[1] * X[i]);
-            }
+        // In two sweeps upwards, so that levels are left and come back to from the same side.
+        for (int i : new int[] {0, 1, 3, 5, 8, 10, 13, 15, 2, 4, 6, 7, 9, 11, 12, 14, 16}) {
+            test.add(new double[] {X[i]}, Y[i] - theta[0] - theta[1] * X[i]);
         }
-        LackOfFit.Outcome outcome = test.judge(2, 1);
+        LackOfFit.Outcome outcome = test.judge(2);
         assertThat(outcome).isNotNull();
         assertThat(outcome.levels()).isEqualTo(10);
         assertThat(outcome.above()).isEqualTo(8);
@@ -47,7 +45,7 @@ final class LackOfFitTest {
         for (int run = 0; run < 400; run++) {
             LackOfFit.Outcome outcome = run(random, 0);
             assertThat(outcome).isNotNull();
-            assertThat(outcome.levels()).isBetween(17, 64);
+            assertThat(outcome.levels()).isBetween(30, 64);
             lacking += outcome.lacks() ? 1 : 0;
         }
         assertThat(lacking).isBetween(5, 38);
@@ -77,7 +75,39 @@ final class LackOfFitTest {
         for (double[] row : rows) {
             test.add(new double[] {row[1]}, row[2] - theta[0] - theta[1] * row[1]);
         }
-        return test.judge(2, 1);
+        return test.judge(2);
+    }
+
+    /** A stair up and down read to 1.5 µA, 6 µA apart on the two ways, and the same with a term for it. */
+    @Test
+    void takesHysteresisForLackOfFitUntilThereIsATermForIt() {
+        for (boolean term : new boolean[] {false, true}) {
+            SplittableRandom random = new SplittableRandom(17);
+            int p = term ? 3 : 2;
+            BlockQr qr = new BlockQr(p);
+            double[][] rows = new double[1700][];
+            for (int i = 0; i < rows.length; i++) {
+                int step = i / 50 % 34;
+                double pressure = step <= 17 ? step : 34 - step;
+                double direction = step >= 1 && step <= 17 ? 1 : -1;
+                double y = 4.003 + 1.0006 * pressure - 0.006 * direction + 0.0015 * random.nextGaussian();
+                rows[i] = new double[] {1, pressure, term ? direction : y, y};
+                qr.add(rows[i], y, 1);
+            }
+            double[] theta = qr.fit().estimates();
+            LackOfFit test = new LackOfFit(1);
+            for (double[] row : rows) {
+                double fitted = theta[0] + theta[1] * row[1] + (term ? theta[2] * row[2] : 0);
+                test.add(new double[] {row[1]}, row[3] - fitted);
+            }
+            LackOfFit.Outcome outcome = test.judge(p);
+            assertThat(outcome).isNotNull();
+            if (term) {
+                assertThat(outcome.f()).isLessThan(2);
+            } else {
+                assertThat(outcome.f()).isGreaterThan(500);
+            }
+        }
     }
 
     @Test
@@ -86,6 +116,6 @@ final class LackOfFitTest {
         for (int i = 0; i < 40; i++) {
             test.add(new double[] {Math.floorDiv(i, 10)}, Math.sin(i));
         }
-        assertThat(test.judge(2, 1)).isNull();
+        assertThat(test.judge(2)).isNull();
     }
 }
