@@ -3,8 +3,8 @@ package benchtrue.estimate;
 import java.util.Arrays;
 
 /**
- * An even thinning of rows in bounded memory: every 2ᵏ-th row is kept, k growing whenever the room is full. Which rows are kept
- * depends on nothing but their number. Rows are stored multiplied by √w, so that all have the same variance.
+ * An even thinning of rows in bounded memory: those of every 2ᵏ-th reading are kept, k growing whenever the room is full. Which
+ * are kept depends on nothing but their number. Rows are stored multiplied by √w, so that all have the same variance.
  */
 public final class ThinnedRows {
     /** Enough for a robust fit to a third of a percent of a standard deviation, in tens of megabytes at most. */
@@ -13,8 +13,9 @@ public final class ThinnedRows {
     private final int p;
     private final int most;
     private double[][] rows = new double[64][];
+    private long[] readings = new long[64];
     private int size;
-    private long seen;
+    private long reading = -1;
     private long stride = 1;
 
     public ThinnedRows(int unknowns) {
@@ -26,19 +27,22 @@ public final class ThinnedRows {
         this.most = most;
     }
 
+    /** The rows that follow are of the next reading. */
+    public void next() {
+        reading++;
+    }
+
     /** φ is copied. */
     public void add(double[] phi, double y, double w) {
-        if (seen++ % stride != 0) {
+        while (reading % stride == 0 && size == most) {
+            halve();
+        }
+        if (reading % stride != 0) {
             return;
         }
-        if (size == most) {
-            halve();
-            if ((seen - 1) % stride != 0) {
-                return;
-            }
-        }
         if (size == rows.length) {
-            rows = Arrays.copyOf(rows, Math.min(most, 2 * rows.length));
+            rows = Arrays.copyOf(rows, Math.min(most, 2 * size));
+            readings = Arrays.copyOf(readings, rows.length);
         }
         double root = Math.sqrt(w);
         double[] row = new double[p + 1];
@@ -46,17 +50,21 @@ public final class ThinnedRows {
             row[j] = root * phi[j];
         }
         row[p] = root * y;
+        readings[size] = reading;
         rows[size++] = row;
     }
 
     private void halve() {
+        stride *= 2;
         int kept = 0;
-        for (int i = 0; i < size; i += 2) {
-            rows[kept++] = rows[i];
+        for (int i = 0; i < size; i++) {
+            if (readings[i] % stride == 0) {
+                readings[kept] = readings[i];
+                rows[kept++] = rows[i];
+            }
         }
         Arrays.fill(rows, kept, size, null);
         size = kept;
-        stride *= 2;
     }
 
     int unknowns() {
@@ -67,7 +75,7 @@ public final class ThinnedRows {
         return size;
     }
 
-    /** Every how many-th row was kept. */
+    /** Every how many-th reading was kept. */
     public long stride() {
         return stride;
     }

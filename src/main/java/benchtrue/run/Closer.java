@@ -65,16 +65,18 @@ final class Closer {
     private List<GroupClosing> analysed() {
         SecondPass pass = new SecondPass(engine, record);
         Systematic systematic = new Systematic(sheet);
+        Systematic noise = Systematic.ofNoise(sheet);
         List<BatchSink> batches = engine.groups().stream().map(BatchSink::new).toList();
-        pass.run(batches, systematic);
-        List<ResidualSink> residuals =
-                batches.stream().map(b -> new ResidualSink(b, systematic)).toList();
-        pass.run(residuals, systematic);
+        pass.run(batches);
+        List<ResidualSink> residuals = batches.stream()
+                .map(b -> new ResidualSink(b, systematic, noise))
+                .toList();
+        pass.run(residuals, systematic, noise);
         List<ResidualSink.Correction> corrections =
                 residuals.stream().map(ResidualSink::correction).toList();
         boolean correct = residuals.stream().anyMatch(ResidualSink::autocorrelated);
         if (correct) {
-            pass.run(corrections, systematic);
+            pass.run(corrections);
         }
         List<GroupClosing> groups = new ArrayList<>();
         for (int g = 0; g < batches.size(); g++) {

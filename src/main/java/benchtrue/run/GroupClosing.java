@@ -8,6 +8,7 @@ import benchtrue.estimate.Constancy;
 import benchtrue.estimate.Diagnosis;
 import benchtrue.estimate.Estimator;
 import benchtrue.estimate.Fit;
+import benchtrue.estimate.Quantiles;
 import benchtrue.estimate.Uncertainty;
 import benchtrue.estimate.Verdict;
 import benchtrue.model.DecisionRule;
@@ -94,8 +95,24 @@ final class GroupClosing {
                 estimator.effectiveReadings(),
                 batch(places),
                 constancy(),
-                residuals.sentences(k),
+                sentences(k),
                 segments(places));
+    }
+
+    /** What concerns all relations of the group is said with the first. */
+    private List<String> sentences(int k) {
+        List<String> sentences = residuals.sentences(k);
+        if (k == 0 && residuals.whole().determined()) {
+            double[] covariance = corrected == null ? scaled(residuals.whole()) : corrected;
+            int p = group.unknowns().size();
+            double[] expanded = new double[p];
+            for (int i = 0; i < p; i++) {
+                expanded[i] = Quantiles.coverageFactor(residuals.whole().degreesOfFreedom())
+                        * Math.sqrt(covariance[i * p + i]);
+            }
+            sentences.addAll(residuals.model().sentences(expanded));
+        }
+        return sentences;
     }
 
     private List<Closing.Unknown> unknowns(int[] places, Estimates of, boolean last) {
@@ -105,7 +122,8 @@ final class GroupClosing {
     private Closing.Unknown unknown(int i, Estimates of, boolean last) {
         UnknownSpec spec = group.unknowns().get(i);
         boolean determined = !Double.isNaN(of.values()[i])
-                && (!last || engine.settling(run.index()).of(i) != Standing.NOT_DETERMINED);
+                && (!last || engine.settling(run.index()).of(i) != Standing.NOT_DETERMINED)
+                && !(last && residuals.model().onlyNoise(i));
         Uncertainty u = of.of(i);
         Judged judged = last && determined ? judge(of.values()[i], u, spec.limits()) : Judged.NONE;
         return new Closing.Unknown(

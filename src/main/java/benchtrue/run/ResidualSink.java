@@ -20,9 +20,10 @@ final class ResidualSink implements SecondPass.Sink {
     private final Systematic systematic;
     private final ResidualTests[] tests;
     private final BlockQr[] shifts;
+    private final ModelTests model;
     private int segment;
 
-    ResidualSink(BatchSink batch, Systematic systematic) {
+    ResidualSink(BatchSink batch, Systematic systematic, Systematic noise) {
         GroupRun run = batch.group();
         group = run.index();
         segments = batch.segments();
@@ -35,6 +36,7 @@ final class ResidualSink implements SecondPass.Sink {
         for (int k = 0; k < tests.length; k++) {
             tests[k] = new ResidualTests();
         }
+        model = new ModelTests(run.group(), whole, noise);
         shifts = new BlockQr[systematic.size()];
         for (int c = 0; c < shifts.length; c++) {
             shifts[c] = new BlockQr(whole.estimates().length);
@@ -52,12 +54,20 @@ final class ResidualSink implements SecondPass.Sink {
     }
 
     @Override
+    public void next(double now, double elapsed) {
+        if (last()) {
+            model.next(now);
+        }
+    }
+
+    @Override
     public void row(int relation, Row row) {
         if (!last() || !whole.determined()) {
             return;
         }
         double[] theta = whole.estimates();
         tests[relation].add(row.residual(theta) * Math.sqrt(row.weight));
+        model.row(group, relation, row, weights[relation]);
         for (int c = 0; c < shifts.length; c++) {
             double shift = systematic.shift(c, group, relation, row, theta);
             if (!Double.isNaN(shift)) {
@@ -106,7 +116,15 @@ final class ResidualSink implements SecondPass.Sink {
     }
 
     List<String> sentences(int relation) {
-        return new ArrayList<>(tests[relation].sentences());
+        List<String> sentences = new ArrayList<>(tests[relation].sentences());
+        if (whole.determined()) {
+            sentences.addAll(model.sentences(relation));
+        }
+        return sentences;
+    }
+
+    ModelTests model() {
+        return model;
     }
 
     /** Sums the scores of the last segment for the covariance after Newey and West. */

@@ -36,8 +36,8 @@ final class SecondPass {
         void row(int relation, Row row);
     }
 
-    /** Each sink takes the group of its place; {@code systematic} is filled for each reading before its rows. */
-    void run(List<? extends Sink> sinks, Systematic systematic) {
+    /** Each sink takes the group of its place; {@code errors} are filled for each reading before its rows. */
+    void run(List<? extends Sink> sinks, Systematic... errors) {
         Rows rows = new Rows(engine.setup().sheet());
         List<Walk> walks = new ArrayList<>();
         for (int g = 0; g < sinks.size(); g++) {
@@ -48,7 +48,9 @@ final class SecondPass {
             double last = Double.NaN;
             while (reading.number < engine.reading() && next(source, reading)) {
                 rows.fill(reading);
-                systematic.fill(reading);
+                for (Systematic each : errors) {
+                    each.fill(reading);
+                }
                 double elapsed = Double.isNaN(last) ? 0 : Math.max(0, reading.time - last);
                 last = reading.time;
                 for (int g = 0; g < walks.size(); g++) {

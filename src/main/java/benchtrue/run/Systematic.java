@@ -1,10 +1,12 @@
 package benchtrue.run;
 
+import benchtrue.estimate.InputNoise;
 import benchtrue.reading.Reading;
 import benchtrue.sheet.BenchSheet;
 import benchtrue.sheet.Channel;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.function.ToDoubleFunction;
 
 /**
  * What an error that stays the same through the run does to the rows: each channel with declared other uncertainty is moved by
@@ -19,16 +21,31 @@ final class Systematic {
     private final Reading scratch;
 
     Systematic(BenchSheet sheet) {
+        this(sheet, Channel::otherUncertainty);
+    }
+
+    private Systematic(BenchSheet sheet, ToDoubleFunction<Channel> error) {
         scratch = new Reading(sheet.channels().size());
         for (int i = 0; i < sheet.channels().size(); i++) {
             Channel channel = sheet.channels().get(i);
-            if (channel.otherUncertainty() > 0) {
+            double shift = error.applyAsDouble(channel);
+            if (shift > 0) {
                 names.add(channel.name());
                 channels.add(i);
-                shifts.add(channel.otherUncertainty());
+                shifts.add(shift);
                 moved.add(new Rows(sheet));
             }
         }
+    }
+
+    /** The same with the declared noise of one reading, the rounding of its indication included. */
+    static Systematic ofNoise(BenchSheet sheet) {
+        return new Systematic(sheet, Systematic::noise);
+    }
+
+    private static double noise(Channel channel) {
+        double sd = Double.isNaN(channel.noise()) ? 0 : channel.noise();
+        return sd > 0 ? InputNoise.standard(sd, Double.isNaN(channel.resolution()) ? 0 : channel.resolution()) : 0;
     }
 
     int size() {
@@ -47,6 +64,11 @@ final class Systematic {
             scratch.values[channels.get(c)] += shifts.get(c);
             moved.get(c).fill(scratch);
         }
+    }
+
+    /** The row of the reading last filled in, with the channel moved. */
+    Row row(int c, int group, int relation) {
+        return moved.get(c).row(group, relation);
     }
 
     /** How far the residual of a row moves with the channel, at these estimates; NaN where a side is missing. */

@@ -12,6 +12,7 @@ final class RobustFitsTest {
         Table table = Table.read("lines/stackloss.csv");
         ThinnedRows rows = new ThinnedRows(4);
         for (double[] r : table.rows()) {
+            rows.next();
             rows.add(new double[] {1, r[0], r[1], r[2]}, r[3], 1);
         }
         return rows;
@@ -53,6 +54,7 @@ final class RobustFitsTest {
         ThinnedRows rows = new ThinnedRows(3);
         for (int i = 0; i < 3000; i++) {
             double[] phi = {1, random.nextDouble(900, 2400), random.nextDouble(30, 175)};
+            rows.next();
             rows.add(phi, 0.05 + 0.0113 * phi[1] - 0.021 * phi[2] + 0.06 * random.nextGaussian(), 1);
         }
         double[] fit = LeastAbsoluteFit.of(rows, leastSquares(rows));
@@ -83,6 +85,7 @@ final class RobustFitsTest {
         for (int i = 0; i < 2400; i++) {
             double x = 1 + i % 50;
             double y = 1.43 + 0.0066 * x + 0.0015 * random.nextGaussian();
+            rows.next();
             rows.add(new double[] {1, x}, random.nextDouble() < 0.12 ? y - 0.25 - 0.65 * random.nextDouble() : y, 1);
         }
         double[] estimates = leastSquares(rows);
@@ -99,15 +102,18 @@ final class RobustFitsTest {
     }
 
     @Test
-    void thinsEvenlyAndKeepsWithinItsRoom() {
+    void thinsEvenlyByReadingsAndKeepsWithinItsRoom() {
         ThinnedRows rows = new ThinnedRows(1, 100);
         for (int i = 0; i < 12_345; i++) {
-            rows.add(new double[] {i}, i, 4);
+            rows.next();
+            rows.add(new double[] {i}, 0, 4);
+            rows.add(new double[] {i}, 1, 4);
         }
         assertThat(rows.size()).isBetween(50, 100);
         for (int i = 0; i < rows.size(); i++) {
-            assertThat(rows.row(i)[0]).isEqualTo(2.0 * i * rows.stride());
+            assertThat(rows.row(i)[0]).isEqualTo(2.0 * Math.floorDiv(i, 2) * rows.stride());
+            assertThat(rows.row(i)[1]).isEqualTo(2.0 * (i % 2));
         }
-        assertThat(rows.size() * rows.stride()).isBetween(12_345L, 12_345L + rows.stride());
+        assertThat(rows.size() / 2 * rows.stride()).isBetween(12_345L, 12_345L + rows.stride());
     }
 }
