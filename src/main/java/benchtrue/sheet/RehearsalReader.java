@@ -156,7 +156,7 @@ final class RehearsalReader {
     /** The resolution; where there is none, a decimal step that the noise hides. */
     private static BigDecimal step(double resolution, double noise) {
         if (resolution > 0) {
-            return BigDecimal.valueOf(resolution);
+            return BigDecimal.valueOf(resolution).stripTrailingZeros();
         }
         return noise > 0
                 ? BigDecimal.ONE.scaleByPowerOfTen((int) Math.floor(Math.log10(noise / STEPS_IN_NOISE)))

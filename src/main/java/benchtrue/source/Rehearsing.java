@@ -12,6 +12,7 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
+import java.util.Locale;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import org.jspecify.annotations.Nullable;
@@ -95,7 +96,8 @@ public final class Rehearsing {
             csv.write(sheet.channels().stream().map(Channel::name).collect(Collectors.joining(",", "time,", "\n")));
             while (rows.advance()) {
                 if (log != null && line != null) {
-                    log.write(String.format("%.6f\t%s\\x0D\\x0A%n", rows.seconds(), RawText.of(line, rows)));
+                    log.write(
+                            String.format(Locale.ROOT, "%.6f\t%s\\x0D\\x0A\n", rows.seconds(), RawText.of(line, rows)));
                 }
                 if (!rows.isGarbled()) {
                     csv.write(row(rows));

@@ -11,7 +11,6 @@ import java.time.Instant;
 import java.time.format.DateTimeFormatter;
 import java.time.format.DateTimeFormatterBuilder;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import org.jspecify.annotations.Nullable;
@@ -61,7 +60,7 @@ final class SimulatedRows implements Rows {
         while (count < rehearsal.readings()) {
             seconds = count++ / rehearsal.ratePerSecond();
             double[] values = truth.next(seconds);
-            moving = count > 1 && !Arrays.equals(values, before);
+            moving = count > 1 && moves(values);
             System.arraycopy(values, 0, before, 0, before.length);
             for (int channel = 0; channel < cells.length; channel++) {
                 cells[channel] = indications.get(channel).next(seconds, values[channel]);
@@ -71,6 +70,16 @@ final class SimulatedRows implements Rows {
             }
         }
         return false;
+    }
+
+    private boolean moves(double[] values) {
+        boolean moves = false;
+        for (int channel = 0; channel < values.length; channel++) {
+            Rehearsal.Instrument instrument = rehearsal.channels().get(channel);
+            double hidden = Math.max(instrument.noise(), instrument.step().doubleValue());
+            moves |= Math.abs(values[channel] - before[channel]) > hidden;
+        }
+        return moves;
     }
 
     private boolean comes() {
@@ -92,7 +101,7 @@ final class SimulatedRows implements Rows {
         return garbled;
     }
 
-    /** Whether the truth is not what it was at the reading before. */
+    /** Whether the truth has moved since the reading before by more than noise and resolution hide. */
     boolean isMoving() {
         return moving;
     }
