@@ -82,6 +82,11 @@ public final class AlarmBook {
         return entries.stream().anyMatch(e -> !e.acknowledged());
     }
 
+    /** How many nobody has acknowledged. */
+    public int unacknowledged() {
+        return (int) entries.stream().filter(e -> !e.acknowledged()).count();
+    }
+
     /** Whether any has not returned to normal, acknowledged or not. */
     public boolean anyStanding() {
         return entries.stream().anyMatch(Entry::stands);

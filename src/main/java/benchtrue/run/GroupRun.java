@@ -256,6 +256,11 @@ final class GroupRun {
         return estimator;
     }
 
+    /** The last rows. */
+    RowRing ring() {
+        return ring;
+    }
+
     Ledger ledger() {
         return ledger;
     }

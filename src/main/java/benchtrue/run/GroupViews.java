@@ -4,6 +4,7 @@ import benchtrue.alarm.Alarm;
 import benchtrue.alarm.ReferenceModel;
 import benchtrue.alarm.RelationMonitor;
 import benchtrue.estimate.Diagnosis;
+import benchtrue.estimate.Forecast;
 import benchtrue.estimate.Uncertainty;
 import benchtrue.estimate.Verdict;
 import benchtrue.model.DecisionRule;
@@ -48,9 +49,10 @@ final class GroupViews {
     void addTo(List<Snapshot.RelationView> views) {
         Diagnosis diagnosis = run.estimator().diagnose();
         Estimates now = run.now();
+        Outlook outlook = new Outlook(run, now, engine.monitor().interval());
         List<Snapshot.UnknownView> unknowns = new ArrayList<>();
         for (int i = 0; i < now.size(); i++) {
-            unknowns.add(unknown(i, now));
+            unknowns.add(unknown(i, now, outlook));
         }
         for (int k = 0; k < run.specs().size(); k++) {
             views.add(relation(k, diagnosis, unknowns));
@@ -85,7 +87,7 @@ final class GroupViews {
                 new Snapshot.Arms(tests.referenceUp(), tests.referenceDown()));
     }
 
-    private Snapshot.UnknownView unknown(int i, Estimates now) {
+    private Snapshot.UnknownView unknown(int i, Estimates now, Outlook outlook) {
         UnknownSpec spec = run.group().unknowns().get(i);
         Uncertainty u = now.of(i);
         DecisionRule rule = engine.setup().sheet().rule();
@@ -94,6 +96,7 @@ final class GroupViews {
         String withheld = withheld();
         ReferenceModel reference = run.monitor().reference();
         double was = reference == null ? Double.NaN : reference.values()[i];
+        Forecast forecast = outlook.forecast(i, spec.wanted());
         return new Snapshot.UnknownView(
                 spec.name(),
                 spec.unit().symbol(),
@@ -104,8 +107,8 @@ final class GroupViews {
                 u.degreesOfFreedom(),
                 engine.settling(run.index()).of(i).word(),
                 spec.wanted(),
-                Double.NaN,
-                "",
+                forecast.seconds(),
+                forecast.neverWhy(),
                 spec.limits(),
                 rule == null ? "" : rule.word(),
                 withheld == null ? verdict.word() : null,

@@ -18,12 +18,16 @@ final class Views {
 
     private final Engine engine;
     private final List<GroupViews> groups = new ArrayList<>();
+    private final Advising advising;
+    private final Stopping stopping;
     private final Recent[] trends;
     private final double[] lastSeen;
     private final double[] lastKept;
 
     Views(Engine engine) {
         this.engine = engine;
+        advising = new Advising(engine);
+        stopping = new Stopping(engine);
         BenchSheet sheet = engine.setup().sheet();
         int channels = sheet.channels().size() + sheet.derived().size();
         trends = new Recent[channels];
@@ -41,6 +45,7 @@ final class Views {
 
     /** To be called after each reading. */
     void reading() {
+        stopping.reading();
         Observation observation = engine.rows().observation();
         double time = engine.time();
         for (int i = 0; i < trends.length; i++) {
@@ -80,9 +85,9 @@ final class Views {
                 channels(sheet, monitor),
                 relations,
                 monitor.book().alarms(),
-                null,
+                advising.advice(),
                 notices(),
-                List.of(),
+                stopping.whyNotYet(),
                 closing);
     }
 
