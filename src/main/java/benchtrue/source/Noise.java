@@ -13,7 +13,15 @@ final class Noise {
 
     /** @param stream numbers of different streams have nothing to do with each other */
     Noise(long seed, int stream) {
-        state = mixed(seed) ^ mixed(stream * GOLDEN + 1);
+        this(mixed(seed) ^ mixed(stream * GOLDEN + 1));
+    }
+
+    private Noise(long state) {
+        this.state = state;
+    }
+
+    static Noise ofState(long state) {
+        return new Noise(state);
     }
 
     private static long mixed(long bits) {

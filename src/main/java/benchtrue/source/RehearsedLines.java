@@ -1,0 +1,40 @@
+package benchtrue.source;
+
+import benchtrue.sheet.BenchSheet;
+import benchtrue.sheet.LineSpec;
+import benchtrue.sheet.Rehearsal;
+import java.util.Map;
+
+/** The lines of the simulated rig with the times at which they are due: those that {@link Rehearsing} writes to raw.log. */
+public final class RehearsedLines {
+    private static final LineSpec PLAIN = new LineSpec(null, 9600, "8N1", ",", false, Map.of());
+
+    private final LineSpec line;
+    private final SimulatedRows rows;
+
+    /**
+     * A sheet without a line gets fields between commas.
+     *
+     * @param rehearsal the sheet's own
+     */
+    public RehearsedLines(BenchSheet sheet, Rehearsal rehearsal, long seed) {
+        LineSpec own = sheet.line();
+        line = own == null ? PLAIN : own;
+        rows = new SimulatedRows(sheet, rehearsal, seed);
+    }
+
+    /** Goes to the next line; false after the last. */
+    public boolean next() {
+        return rows.advance();
+    }
+
+    /** When the line is due, in seconds since the start. */
+    public double seconds() {
+        return rows.seconds();
+    }
+
+    /** Without its end. */
+    public String text() {
+        return RawText.of(line, rows);
+    }
+}
