@@ -83,6 +83,21 @@ public final class NeweyWest {
         return covariance;
     }
 
+    /**
+     * How many times larger the widened variance is than that of independent residuals, of the unknown of which it is
+     * largest, at least 1: so many readings count as one.
+     *
+     * @param widened of {@link #covariance}
+     * @param independent s²P
+     */
+    public static double factor(double[] widened, double[] independent, int unknowns) {
+        double factor = 1;
+        for (int i = 0; i < unknowns; i++) {
+            factor = Math.max(factor, widened[i * unknowns + i] / independent[i * unknowns + i]);
+        }
+        return factor;
+    }
+
     private double[] product(double[] a, double[] b) {
         double[] c = new double[p * p];
         for (int i = 0; i < p; i++) {

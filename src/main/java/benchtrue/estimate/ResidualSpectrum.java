@@ -18,8 +18,8 @@ public final class ResidualSpectrum {
     private static final int LINE = 2;
     /** Longer ones cannot be told from a slow drift: at least so many periods must fit in a segment. */
     private static final int FEWEST_PERIODS = 3;
-    /** A line matters when it holds this share of the variance (common practice, no source). */
-    private static final double SHARE = 0.25;
+    /** A line dominates when it holds this share of the variance (common practice, no source). */
+    private static final double SHARE = 0.5;
     /** And it must stand out from its neighbourhood: 10 dB (common practice, no source). */
     private static final double OUTSTANDING = 10;
 

@@ -120,12 +120,12 @@ public final class ResidualTests {
         double q = ljungBox(lags);
         sentences.add(String.format(
                 Locale.ROOT,
-                "Durbin-Watson %.3f; autocorrelation at lag 1 %+.3f; Ljung-Box over %d lags %.4g (P = %.2g).",
+                "Durbin-Watson %.3f; autocorrelation at lag 1 %+.3f; Ljung-Box over %d lags %.4g (%s).",
                 durbinWatson(),
                 autocorrelation(1),
                 lags,
                 q,
-                Quantiles.chiSquaredTail(q, lags)));
+                probability(Quantiles.chiSquaredTail(q, lags))));
         if (autocorrelated()) {
             sentences.add(String.format(
                     Locale.ROOT,
@@ -136,5 +136,9 @@ public final class ResidualTests {
                     + " instrument. The uncertainties are not narrowed for it.");
         }
         return sentences;
+    }
+
+    private static String probability(double p) {
+        return p < 1e-4 ? "P < 0.0001" : String.format(Locale.ROOT, "P = %.2g", p);
     }
 }

@@ -1,6 +1,7 @@
 package benchtrue.estimate;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 
@@ -10,14 +11,29 @@ import java.util.Locale;
  * @param huber Huber's estimate with c = 1.345
  * @param leastAbsolute least absolute deviations
  * @param rows how many were used
+ * @param coarse whether the response takes so few values that least absolute deviations runs along its steps
  * @param stride every how many-th reading that was
  */
-public record RobustFits(double[] huber, double[] leastAbsolute, int rows, long stride) {
+public record RobustFits(double[] huber, double[] leastAbsolute, int rows, long stride, boolean coarse) {
+    /** Rows for each different value of the response above which it is coarse (common practice, no source). */
+    private static final int SHARED = 4;
+
+    private static final String LEAST = "Least absolute deviations";
 
     /** @param start the least-squares estimates, all determined */
     public static RobustFits of(ThinnedRows rows, double[] start) {
         double[] leastAbsolute = LeastAbsoluteFit.of(rows, start);
-        return new RobustFits(HuberFit.of(rows, leastAbsolute), leastAbsolute, rows.size(), rows.stride());
+        return new RobustFits(
+                HuberFit.of(rows, leastAbsolute), leastAbsolute, rows.size(), rows.stride(), coarse(rows));
+    }
+
+    private static boolean coarse(ThinnedRows rows) {
+        int p = rows.unknowns();
+        double[] responses = new double[rows.size()];
+        for (int i = 0; i < responses.length; i++) {
+            responses[i] = rows.row(i)[p];
+        }
+        return Arrays.stream(responses).distinct().count() * SHARED < responses.length;
     }
 
     /**
@@ -29,17 +45,16 @@ public record RobustFits(double[] huber, double[] leastAbsolute, int rows, long 
         List<String> sentences = new ArrayList<>();
         for (int j = 0; j < estimates.length; j++) {
             compare(sentences, "Huber", names.get(j), units.get(j), huber[j], estimates[j], expanded[j]);
-            compare(
-                    sentences,
-                    "Least absolute deviations",
-                    names.get(j),
-                    units.get(j),
-                    leastAbsolute[j],
-                    estimates[j],
-                    expanded[j]);
+            if (!coarse) {
+                compare(sentences, LEAST, names.get(j), units.get(j), leastAbsolute[j], estimates[j], expanded[j]);
+            }
         }
-        if (sentences.isEmpty()) {
-            sentences.add("Huber's fit and least absolute deviations lie within U of least squares" + of() + ".");
+        if (coarse) {
+            sentences.add("Least absolute deviations is not judged: the response takes too few different values.");
+        }
+        if (sentences.size() == (coarse ? 1 : 0)) {
+            sentences.add("Huber's fit" + (coarse ? " lies" : " and least absolute deviations lie")
+                    + " within U of least squares" + of() + ".");
         }
         return sentences;
     }

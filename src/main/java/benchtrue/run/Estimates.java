@@ -23,6 +23,7 @@ record Estimates(
         double[][] systematic,
         List<String> channels,
         double[] other) {
+    private static final double ROUNDING = 1e-9;
 
     int size() {
         return values.length;
@@ -57,6 +58,12 @@ record Estimates(
         for (int i = 0; i < other.length; i++) {
             add(components, "other, declared", Math.abs(coefficients[i] * other[i]));
         }
+        double largest = components.stream()
+                .mapToDouble(Component::standardUncertainty)
+                .max()
+                .orElse(0);
+        // What rounding leaves of an effect that cancels.
+        components.removeIf(c -> c.standardUncertainty() < ROUNDING * largest);
         return components;
     }
 

@@ -8,7 +8,7 @@ import benchtrue.estimate.Constancy;
 import benchtrue.estimate.Diagnosis;
 import benchtrue.estimate.Estimator;
 import benchtrue.estimate.Fit;
-import benchtrue.estimate.Quantiles;
+import benchtrue.estimate.NeweyWest;
 import benchtrue.estimate.Uncertainty;
 import benchtrue.estimate.Verdict;
 import benchtrue.model.DecisionRule;
@@ -53,11 +53,24 @@ final class GroupClosing {
         }
         return new Estimates(
                 now.values(),
-                corrected == null ? scaled(residuals.whole()) : corrected,
-                now.degreesOfFreedom(),
+                covariance(),
+                now.degreesOfFreedom() / independent(),
                 residuals.systematic(),
                 now.channels(),
                 now.other());
+    }
+
+    /** Of the whole segment at λ = 1, p×p. */
+    private double[] covariance() {
+        return corrected == null ? scaled(residuals.whole()) : corrected;
+    }
+
+    /** How many readings of the whole segment count as one. */
+    private double independent() {
+        return corrected == null
+                ? 1
+                : NeweyWest.factor(
+                        corrected, scaled(residuals.whole()), group.unknowns().size());
     }
 
     /** s²P. */
@@ -92,7 +105,7 @@ final class GroupClosing {
                 Names.groups(group, diagnosis.inseparable()),
                 residuals.autocorrelation(k),
                 residuals.durbinWatson(k),
-                estimator.effectiveReadings(),
+                estimator.effectiveReadings() / (forgets() ? 1 : independent()),
                 batch(places),
                 constancy(),
                 sentences(k),
@@ -103,12 +116,16 @@ final class GroupClosing {
     private List<String> sentences(int k) {
         List<String> sentences = residuals.sentences(k);
         if (k == 0 && residuals.whole().determined()) {
-            double[] covariance = corrected == null ? scaled(residuals.whole()) : corrected;
-            int p = group.unknowns().size();
-            double[] expanded = new double[p];
-            for (int i = 0; i < p; i++) {
-                expanded[i] = Quantiles.coverageFactor(residuals.whole().degreesOfFreedom())
-                        * Math.sqrt(covariance[i * p + i]);
+            Estimates all = new Estimates(
+                    residuals.whole().estimates(),
+                    covariance(),
+                    residuals.whole().degreesOfFreedom() / independent(),
+                    residuals.systematic(),
+                    run.now().channels(),
+                    run.now().other());
+            double[] expanded = new double[all.size()];
+            for (int i = 0; i < expanded.length; i++) {
+                expanded[i] = all.of(i).expanded();
             }
             sentences.addAll(residuals.model().sentences(expanded));
         }

@@ -15,6 +15,9 @@ import java.util.Locale;
 
 /** What the rows of one segment say against the equation itself: periods, moved unknowns, lack of fit, wild readings, noise of x. */
 final class ModelTests {
+    /** Smaller autocorrelations are left alone (common practice, no source). */
+    private static final double MATTERS = 0.1;
+
     private final Group group;
     private final Fit fit;
     private final ResidualSpectrum[] spectra;
@@ -78,7 +81,8 @@ final class ModelTests {
         return inputs.on(unknown, fit.covariance(), fit.estimates(), expanded);
     }
 
-    List<String> sentences(int relation) {
+    /** @param autocorrelation of the residuals at lag 1, which the bounds do not allow for */
+    List<String> sentences(int relation, double autocorrelation) {
         List<String> sentences = new ArrayList<>();
         ResidualSpectrum.Period period = spectra[relation].dominant();
         if (period != null) {
@@ -91,7 +95,7 @@ final class ModelTests {
                     period.readings() * interval(),
                     100 * period.share()));
         }
-        stability(sentences, stabilities[relation]);
+        stability(sentences, stabilities[relation], autocorrelation > MATTERS);
         LackOfFit.Outcome lack =
                 lacks[relation].judge(group.relations().get(relation).unknownIndex().length);
         if (lack != null) {
@@ -104,23 +108,26 @@ final class ModelTests {
         return (last - first) / (readings - 1);
     }
 
-    private static void stability(List<String> sentences, Stability stability) {
+    private static void stability(List<String> sentences, Stability stability, boolean dependent) {
+        String unless = dependent ? ", unless the noise itself is autocorrelated." : ".";
         Stability.Curve sums = stability.cusum();
         Stability.Curve squares = stability.cusumOfSquares();
         if (sums.crossed()) {
             sentences.add(String.format(
                     Locale.ROOT,
                     "The cumulated recursive residuals cross their 5 %% bound at %.1f s (%.2f of it at most): the unknowns, or"
-                            + " an offset, moved during the segment.",
+                            + " an offset, moved during the segment%s",
                     sums.crossedAt(),
-                    sums.largest()));
+                    sums.largest(),
+                    unless));
         }
         if (squares.crossed()) {
             sentences.add(String.format(
                     Locale.ROOT,
                     "The cumulated squares of the recursive residuals leave their 5 %% bounds, most at %.1f s: the noise was"
-                            + " not the same throughout.",
-                    squares.largestAt()));
+                            + " not the same throughout%s",
+                    squares.largestAt(),
+                    unless));
         }
         if (!sums.crossed() && !squares.crossed() && !Double.isNaN(sums.largest())) {
             sentences.add("Cumulated recursive residuals and their squares stay within their 5 % bounds.");

@@ -118,7 +118,7 @@ final class ResidualSink implements SecondPass.Sink {
     List<String> sentences(int relation) {
         List<String> sentences = new ArrayList<>(tests[relation].sentences());
         if (whole.determined()) {
-            sentences.addAll(model.sentences(relation));
+            sentences.addAll(model.sentences(relation, tests[relation].autocorrelation(1)));
         }
         return sentences;
     }
