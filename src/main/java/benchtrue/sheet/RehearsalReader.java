@@ -19,11 +19,13 @@ final class RehearsalReader {
     private final List<Channel> channels;
     private final List<String> names;
     private final List<Relation> relations;
+    private final List<Derived> derived;
 
-    private RehearsalReader(Keys keys, List<Channel> channels, List<Relation> relations) {
+    private RehearsalReader(Keys keys, List<Channel> channels, List<Derived> derived, List<Relation> relations) {
         this.keys = keys;
         this.channels = channels;
         names = channels.stream().map(Channel::name).toList();
+        this.derived = derived;
         this.relations = relations;
     }
 
@@ -33,7 +35,7 @@ final class RehearsalReader {
         if (keys == null || channels.channels().isEmpty()) {
             return null;
         }
-        return new RehearsalReader(keys, channels.channels(), relations.relations()).read();
+        return new RehearsalReader(keys, channels.channels(), channels.derived(), relations.relations()).read();
     }
 
     private @Nullable Rehearsal read() {
@@ -116,6 +118,7 @@ final class RehearsalReader {
         if (table != null) {
             table.done();
         }
+        checkResponses(instruments);
         return instruments;
     }
 
@@ -161,6 +164,19 @@ final class RehearsalReader {
         return noise > 0
                 ? BigDecimal.ONE.scaleByPowerOfTen((int) Math.floor(Math.log10(noise / STEPS_IN_NOISE)))
                 : DEFAULT_STEP;
+    }
+
+    private void checkResponses(List<Rehearsal.Instrument> instruments) {
+        for (Relation relation : relations) {
+            int channel = names.indexOf(relation.responseText());
+            boolean made = channel >= 0 && instruments.get(channel).course() == null;
+            if (made && SelfReference.isIn(relation, channel, names.size(), derived)) {
+                keys.mistake(
+                        "channels",
+                        relation.text() + " computes its response from itself, which a rehearsal cannot",
+                        "give " + names.get(channel) + " a course of its own");
+            }
+        }
     }
 
     /** A channel has a course, or a relation whose response it is; a course follows a channel that follows none. */
