@@ -2,7 +2,7 @@ package benchtrue.estimate;
 
 /**
  * Whether a signal is steady (Cao and Rhinehart 1995, Journal of Process Control 5, 363): the variance about a filtered mean
- * over the variance from successive differences, with filters 0.2, 0.1, 0.1. On white noise the ratio is 1 in the mean and
+ * over the variance from successive differences, with filters 0.2, 0.1, 0.1. On white noise the ratio is about 1, and
  * above 1.73 in 1 % of readings (simulated).
  */
 public final class SteadyState {
