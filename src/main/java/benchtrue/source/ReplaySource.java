@@ -53,7 +53,11 @@ public final class ReplaySource {
         long size = Files.isRegularFile(path) ? Files.size(path) : 0;
         RowReader reader = new RowReader(rows, columns, sheet.channels(), decimalComma, size);
         return new Opened.Ready(
-                new RowSource(path.toString(), reader, sheet.channels().size()), notices);
+                new RowSource(
+                        String.valueOf(path.getFileName()),
+                        reader,
+                        sheet.channels().size()),
+                notices);
     }
 
     private static boolean isUtf16(CsvRows rows) {

@@ -40,9 +40,7 @@ class ReplaySourceTest {
                 came.add(
                         outcome == Outcome.READING
                                 ? reading.number + ": " + reading.time + " " + Arrays.toString(reading.values)
-                                : outcome
-                                        + source.problem()
-                                                .substring(file.toString().length()));
+                                : outcome + source.problem().substring("readings.csv".length()));
             }
             assertThat(source.progress()).isEqualTo(1);
         }
