@@ -2,6 +2,7 @@ package benchtrue.estimate;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Collections;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
@@ -12,6 +13,10 @@ final class Conditioning {
     private static final double LARGEST = 1e12;
     private static final double HIGH = 30;
     private static final double MAJOR = 0.5;
+    private static final double COMPETING = 10;
+    /** Correlation of errors from which two unknowns belong to one dependency. */
+    private static final double TOGETHER = 0.1;
+
     /** Part of an unknown's unit vector in the unknown directions above which it is not determined. */
     private static final double TOUCHED = 1e-6;
 
@@ -58,15 +63,21 @@ final class Conditioning {
         }
         boolean[] weak = new boolean[p];
         List<List<Integer>> inseparable = new ArrayList<>();
-        for (int place = p - 1; place > 0; place--) {
-            int j = order[place];
-            if (singular[j] * HIGH < largest) {
-                List<Integer> group = major(j, largest);
+        for (int place = p - 1; place > 0 && singular[order[place]] * HIGH < largest; ) {
+            int first = place;
+            // Singular values of one order of magnitude share out their dependencies arbitrarily: taken together.
+            while (first > 1
+                    && singular[order[first - 1]] * HIGH < largest
+                    && singular[order[first - 1]] < COMPETING * bounded(order[place], largest)) {
+                first--;
+            }
+            for (List<Integer> group : groups(first, place, largest)) {
                 group.forEach(k -> weak[k] = true);
                 if (group.size() > 1) {
                     inseparable.add(group);
                 }
             }
+            place = first - 1;
         }
         double[] weakest = new double[p];
         for (int k = 0; k < p; k++) {
@@ -89,25 +100,50 @@ final class Conditioning {
         return touched < TOUCHED * TOUCHED;
     }
 
-    /** Unknowns of whose variance more than half comes from singular value j. */
-    private List<Integer> major(int j, double largest) {
-        List<Integer> group = new ArrayList<>();
+    /**
+     * Unknowns of whose variance more than half comes from the singular values at these places, together where their errors go
+     * together.
+     */
+    private List<List<Integer>> groups(int first, int last, double largest) {
+        List<Integer> left = new ArrayList<>();
         for (int k = 0; k < p; k++) {
-            double own = share(k, j, largest);
-            double all = 0;
-            for (int l = 0; l < p; l++) {
-                all += share(k, l, largest);
-            }
-            if (own > MAJOR * all) {
-                group.add(k);
+            if (covariance(k, k, first, last, largest) > MAJOR * covariance(k, k, 0, p - 1, largest)) {
+                left.add(k);
             }
         }
-        return group;
+        List<List<Integer>> groups = new ArrayList<>();
+        while (!left.isEmpty()) {
+            List<Integer> group = new ArrayList<>(List.of(left.remove(0)));
+            for (int i = 0; i < group.size(); i++) {
+                for (int k : List.copyOf(left)) {
+                    if (together(group.get(i), k, first, last, largest)) {
+                        left.remove((Integer) k);
+                        group.add(k);
+                    }
+                }
+            }
+            Collections.sort(group);
+            groups.add(group);
+        }
+        return groups;
     }
 
-    private double share(int k, int j, double largest) {
-        double bounded = Math.max(singular[j], largest / (LARGEST * LARGEST));
-        double entry = v.get(k, j) / bounded;
-        return entry * entry;
+    private boolean together(int k, int l, int first, int last, double largest) {
+        double own = covariance(k, k, first, last, largest) * covariance(l, l, first, last, largest);
+        return Math.abs(covariance(k, l, first, last, largest)) > TOGETHER * Math.sqrt(own);
+    }
+
+    /** Of two scaled unknowns, from the singular values at these places. */
+    private double covariance(int k, int l, int first, int last, double largest) {
+        double sum = 0;
+        for (int place = first; place <= last; place++) {
+            int j = order[place];
+            sum += v.get(k, j) / bounded(j, largest) * (v.get(l, j) / bounded(j, largest));
+        }
+        return sum;
+    }
+
+    private double bounded(int j, double largest) {
+        return Math.max(singular[j], largest / (LARGEST * LARGEST));
     }
 }

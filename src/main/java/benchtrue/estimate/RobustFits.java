@@ -10,21 +10,27 @@ import java.util.Locale;
  *
  * @param huber Huber's estimate with c = 1.345
  * @param leastAbsolute least absolute deviations
+ * @param scale of the residuals about Huber's fit: their median size over 0.6745
  * @param rows how many were used
  * @param coarse whether the response takes so few values that least absolute deviations runs along its steps
  * @param stride every how many-th reading that was
  */
-public record RobustFits(double[] huber, double[] leastAbsolute, int rows, long stride, boolean coarse) {
+public record RobustFits(double[] huber, double[] leastAbsolute, double scale, int rows, long stride, boolean coarse) {
     /** Rows for each different value of the response above which it is coarse (common practice, no source). */
     private static final int SHARED = 4;
 
+    /** s this many times the robust scale: tails far heavier than normal ones (common practice, no source). */
+    private static final double HEAVY = 2;
+
+    private static final double MEDIAN = 0.6745;
     private static final String LEAST = "Least absolute deviations";
 
     /** @param start the least-squares estimates, all determined */
     public static RobustFits of(ThinnedRows rows, double[] start) {
         double[] leastAbsolute = LeastAbsoluteFit.of(rows, start);
-        return new RobustFits(
-                HuberFit.of(rows, leastAbsolute), leastAbsolute, rows.size(), rows.stride(), coarse(rows));
+        double[] huber = HuberFit.of(rows, leastAbsolute);
+        double scale = HuberFit.scale(rows, huber);
+        return new RobustFits(huber, leastAbsolute, scale, rows.size(), rows.stride(), coarse(rows));
     }
 
     private static boolean coarse(ThinnedRows rows) {
@@ -39,9 +45,11 @@ public record RobustFits(double[] huber, double[] leastAbsolute, int rows, long 
     /**
      * A sentence for each unknown of which a robust fit is further than U from least squares, or one that none is.
      *
-     * @param expanded U of the least-squares estimates
+     * @param sd s of the least-squares fit
+     * @param expanded U of its estimates
      */
-    public List<String> sentences(List<String> names, List<String> units, double[] estimates, double[] expanded) {
+    public List<String> sentences(
+            List<String> names, List<String> units, double[] estimates, double sd, double[] expanded) {
         List<String> sentences = new ArrayList<>();
         for (int j = 0; j < estimates.length; j++) {
             compare(sentences, "Huber", names.get(j), units.get(j), huber[j], estimates[j], expanded[j]);
@@ -55,6 +63,15 @@ public record RobustFits(double[] huber, double[] leastAbsolute, int rows, long 
         if (sentences.size() == (coarse ? 1 : 0)) {
             sentences.add("Huber's fit" + (coarse ? " lies" : " and least absolute deviations lie")
                     + " within U of least squares" + of() + ".");
+        }
+        if (sd > HEAVY * scale) {
+            sentences.add(String.format(
+                    Locale.ROOT,
+                    "Half of the residuals lie within %.3g of Huber's fit, as of noise with s = %.3g; the few large ones make"
+                            + " s = %.3g.",
+                    MEDIAN * scale,
+                    scale,
+                    sd));
         }
         return sentences;
     }
