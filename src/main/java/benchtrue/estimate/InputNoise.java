@@ -27,18 +27,32 @@ public final class InputNoise {
      *
      * @param moved regressors of the row with the channel moved; read
      * @param movedY its response
+     * @return whether any regressor moved
      */
-    public void add(double[] phi, double y, double[] moved, double movedY, double w) {
+    public boolean add(double[] phi, double y, double[] moved, double movedY, double w) {
         for (int j = 0; j < p; j++) {
             delta[j] = moved[j] - phi[j];
         }
+        boolean any = false;
         for (int i = 0; i < p; i++) {
             if (delta[i] != 0) {
+                any = true;
                 m[i] += w * delta[i] * (movedY - y);
                 for (int j = 0; j < p; j++) {
                     n[i * p + j] += w * delta[i] * delta[j];
                 }
             }
+        }
+        return any;
+    }
+
+    /** All rows so far weigh {@code factor} times as much. */
+    public void age(double factor) {
+        for (int i = 0; i < n.length; i++) {
+            n[i] *= factor;
+        }
+        for (int i = 0; i < p; i++) {
+            m[i] *= factor;
         }
     }
 

@@ -14,11 +14,15 @@ import org.jspecify.annotations.Nullable;
  * operator's acts only, never on a clock: the same readings give the same results to the last bit. Used by one thread.
  */
 public final class Engine {
+    /** Used readings after which it is known which channels stand in regressors. */
+    private static final int FELT_BY = 256;
+
     private final Setup setup;
     private final RunListener listener;
     private final Monitor monitor;
     private final Rows rows;
     private final Systematic systematic;
+    private final Systematic noise;
     private final Tally tally = new Tally();
     private final Log log;
     private final List<GroupRun> groups = new ArrayList<>();
@@ -29,6 +33,7 @@ public final class Engine {
     private List<Exclusion> exclusions;
     private @Nullable Instant startedUtc;
     private @Nullable String restart;
+    private boolean feltKnown;
     private double time = Double.NaN;
     private double lastTime = Double.NaN;
     private long reading;
@@ -40,12 +45,13 @@ public final class Engine {
         monitor = new Monitor(sheet);
         rows = new Rows(sheet);
         systematic = new Systematic(sheet);
+        noise = Systematic.ofNoise(sheet);
         log = new Log(listener, tally);
         exclusions = sheet.exclusions();
         int unknowns = 0;
         int relations = 0;
         for (int g = 0; g < sheet.groups().size(); g++) {
-            GroupRun group = new GroupRun(g, sheet.groups().get(g), monitor.group(g), systematic);
+            GroupRun group = new GroupRun(g, sheet.groups().get(g), monitor.group(g), systematic, noise);
             groups.add(group);
             settlings.add(new Settling(group));
             adoptions.add(
@@ -81,9 +87,14 @@ public final class Engine {
         restart = null;
         rows.fill(next);
         systematic.fill(next);
+        noise.fill(next);
         tally.reading(time, take());
         log.alarms(monitor.book().drain());
         settle();
+        if (!feltKnown && tally.count(Tally.Fate.USED) >= FELT_BY) {
+            feltKnown = true;
+            noise.dropUnfelt();
+        }
         if (listener.wants(reading)) {
             publish();
         }

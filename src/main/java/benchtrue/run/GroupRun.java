@@ -21,6 +21,7 @@ final class GroupRun {
     private final GroupMonitor monitor;
     private final Estimator estimator;
     private final Shadows shadows;
+    private final InputWatch inputs;
     private final Ledger ledger;
     private final RowRing ring;
     private final RelationTrack[] tracks;
@@ -31,7 +32,7 @@ final class GroupRun {
     private double segmentStart;
     private String segmentReason = "start of the run";
 
-    GroupRun(int index, Group group, GroupMonitor monitor, Systematic systematic) {
+    GroupRun(int index, Group group, GroupMonitor monitor, Systematic systematic, Systematic noise) {
         this.index = index;
         this.group = group;
         this.monitor = monitor;
@@ -41,6 +42,7 @@ final class GroupRun {
         boolean[] constant = constantTerms(group);
         estimator = new Estimator(constant, relations, forgetting);
         shadows = new Shadows(systematic, index, constant, forgetting);
+        inputs = new InputWatch(noise, index, p);
         ledger = new Ledger(relations);
         ring = new RowRing(RING, relations, p);
         tracks = new RelationTrack[relations];
@@ -71,6 +73,7 @@ final class GroupRun {
             long number, double time, double elapsed, Row[] rows, @Nullable String barred, boolean onHold, Log log) {
         estimator.next(elapsed);
         shadows.next(elapsed);
+        inputs.next(forgetting, elapsed);
         ring.add(number, time, elapsed, rows);
         Tally.Fate fate = Tally.Fate.USED;
         for (int k = 0; k < rows.length; k++) {
@@ -133,6 +136,7 @@ final class GroupRun {
             return Tally.Fate.HELD_OUT;
         }
         use(k, row);
+        inputs.use(k, row, row.weight * estimator.relationWeight(k));
         log.used(label(k));
         return Tally.Fate.USED;
     }
@@ -194,6 +198,7 @@ final class GroupRun {
         segmentReason = reason;
         estimator.restart();
         shadows.restart();
+        inputs.restart();
         monitor.restart();
         for (RelationTrack track : tracks) {
             track.restart();
@@ -205,6 +210,11 @@ final class GroupRun {
         ledger.forgetting(fromReading, newForgetting);
         estimator.forget(newForgetting);
         shadows.forget(newForgetting);
+    }
+
+    /** Whether at least half of what tells this unknown from the others is declared noise of the channels. */
+    boolean onlyNoise(int unknown) {
+        return inputs.onlyNoise(unknown, estimator, estimates);
     }
 
     /** Fills its part of the row that is published. */

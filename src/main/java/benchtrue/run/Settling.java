@@ -59,7 +59,7 @@ final class Settling {
     }
 
     private Standing standing(int i, Estimates now, boolean quiet, long reading, double time) {
-        if (!diagnosis.determined()[i] || Double.isNaN(now.values()[i])) {
+        if (!diagnosis.determined()[i] || Double.isNaN(now.values()[i]) || run.onlyNoise(i)) {
             sinceReading[i] = -1;
             return Standing.NOT_DETERMINED;
         }

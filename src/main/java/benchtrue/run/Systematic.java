@@ -18,6 +18,7 @@ final class Systematic {
     private final List<Integer> channels = new ArrayList<>();
     private final List<Double> shifts = new ArrayList<>();
     private final List<Rows> moved = new ArrayList<>();
+    private final List<Boolean> felt = new ArrayList<>();
     private final Reading scratch;
 
     Systematic(BenchSheet sheet) {
@@ -34,6 +35,7 @@ final class Systematic {
                 channels.add(i);
                 shifts.add(shift);
                 moved.add(new Rows(sheet));
+                felt.add(false);
             }
         }
     }
@@ -63,6 +65,24 @@ final class Systematic {
             System.arraycopy(reading.values, 0, scratch.values, 0, scratch.values.length);
             scratch.values[channels.get(c)] += shifts.get(c);
             moved.get(c).fill(scratch);
+        }
+    }
+
+    /** The channel moves a regressor. */
+    void felt(int c) {
+        felt.set(c, true);
+    }
+
+    /** Leaves out the channels of which no effect has been felt, as those that stand in responses only. */
+    void dropUnfelt() {
+        for (int c = size() - 1; c >= 0; c--) {
+            if (!felt.get(c)) {
+                names.remove(c);
+                channels.remove(c);
+                shifts.remove(c);
+                moved.remove(c);
+                felt.remove(c);
+            }
         }
     }
 

@@ -18,16 +18,16 @@ import java.util.regex.Pattern;
 import org.jspecify.annotations.Nullable;
 import org.junit.jupiter.api.Test;
 
-/** On the shipped run of the gear pump, whose speed and pressure are adjustable. */
-final class AdvisingTest {
-    private static final Path RIG = Path.of("replays/gear-pump");
+/** On shipped runs as they stand after some time. */
+final class ShippedRunsTest {
 
     private static final Pattern HOLD =
             Pattern.compile("(?:hold|then) \\d+ readings \\(\\d+ s\\) at n = (\\d+) rev/min, dp = (\\d+) bar");
 
-    private static Engine after(double seconds) throws Exception {
+    private static Engine after(String rig, double seconds) throws Exception {
+        Path folder = Path.of("replays", rig);
         BenchSheet sheet = Objects.requireNonNull(
-                SheetReader.read(RIG.resolve("sheet.toml")).sheet());
+                SheetReader.read(folder.resolve("sheet.toml")).sheet());
         List<@Nullable ReferenceModel> none = new ArrayList<>();
         sheet.groups().forEach(g -> none.add(null));
         RunListener deaf = new RunListener() {
@@ -40,8 +40,8 @@ final class AdvisingTest {
             @Override
             public void closed(Closing closing) {}
         };
-        Engine engine = new Engine(new Setup(sheet, false, "replay", "gear-pump", null, none), deaf);
-        Opened opened = ReplaySource.open(RIG.resolve("readings.csv"), sheet);
+        Engine engine = new Engine(new Setup(sheet, false, "replay", rig, null, none), deaf);
+        Opened opened = ReplaySource.open(folder.resolve("readings.csv"), sheet);
         assertThat(opened).isInstanceOf(Opened.Ready.class);
         try (Source source = ((Opened.Ready) opened).source()) {
             Reading reading = engine.newReading();
@@ -54,7 +54,7 @@ final class AdvisingTest {
 
     @Test
     void namesPointsInsideTheDeclaredLimits() throws Exception {
-        Engine engine = after(30);
+        Engine engine = after("gear-pump", 30);
         Snapshot.AdviceView advice = new Advising(engine).advice();
         assertThat(advice).isNotNull();
         assertThat(advice.refusal()).isEmpty();
@@ -77,7 +77,7 @@ final class AdvisingTest {
 
     @Test
     void foretellsWhenTheWantedUncertaintyComesOrWhyNever() throws Exception {
-        Engine engine = after(30);
+        Engine engine = after("gear-pump", 30);
         GroupRun run = engine.groups().get(0);
         Outlook outlook = new Outlook(run, run.now(), engine.monitor().interval());
         assertThat(outlook.forecast(0, 1).seconds()).isZero();
@@ -87,9 +87,26 @@ final class AdvisingTest {
 
     @Test
     void givesNoneWhileAnAlarmIsUnacknowledged() throws Exception {
-        Snapshot.AdviceView advice = new Advising(after(450)).advice();
+        Snapshot.AdviceView advice = new Advising(after("gear-pump", 450)).advice();
         assertThat(advice).isNotNull();
         assertThat(advice.refusal()).isEqualTo("an alarm is unacknowledged");
         assertThat(advice.words()).isEmpty();
+    }
+
+    /** While the load stays centred, what is left to tell the legs apart is the noise of their channels. */
+    @Test
+    void legsUnderACentredLoadAreNotDeterminedUntilEachIsLoadedAlone() throws Exception {
+        Engine centred = after("dosing-vessel", 299);
+        assertThat(centred.groups().get(0).estimator().determined()).isTrue();
+        for (int leg = 0; leg < 3; leg++) {
+            assertThat(centred.settling(0).of(leg)).isEqualTo(Standing.NOT_DETERMINED);
+        }
+        assertThat(centred.settling(0).of(3)).isNotEqualTo(Standing.NOT_DETERMINED);
+        assertThat(centred.settling(0).diagnosis().conditionIndex()).isGreaterThan(1e3);
+        assertThat(centred.settling(0).diagnosis().inseparable()).containsExactly(List.of(0, 1, 2));
+        Engine each = after("dosing-vessel", 599);
+        for (int unknown = 0; unknown < 4; unknown++) {
+            assertThat(each.settling(0).of(unknown)).isEqualTo(Standing.SETTLED);
+        }
     }
 }
