@@ -22,15 +22,16 @@ final class CauseFinder {
     private static final double SAME = 0.95;
 
     private final Bank bank;
+    private final Review review;
     private final ReferenceWatch.Frozen frozen;
     private final double coverage;
     private final int q;
     private final double[] m;
     private final double[] g;
-    private final Bank.Interval interval = new Bank.Interval();
 
-    CauseFinder(Bank bank, ReferenceWatch.Frozen frozen) {
+    CauseFinder(Bank bank, Review review, ReferenceWatch.Frozen frozen) {
         this.bank = bank;
+        this.review = review;
         this.frozen = frozen;
         coverage = Quantiles.coverageFactor(frozen.nu());
         q = bank.regressors();
@@ -62,11 +63,6 @@ final class CauseFinder {
         return lead(leader());
     }
 
-    /** Whether some hundreds of readings since the onset, the last ones, show nothing of any change. */
-    boolean quiet(double onset) {
-        return bank.quiet(onset, m, g);
-    }
-
     /** @param now in s */
     Cause find(double now) {
         int leader = leader();
@@ -74,12 +70,17 @@ final class CauseFinder {
         List<Integer> rivals = rivals(leader);
         double lead = lead(leader);
         boolean noise = leader == q;
-        boolean together = !noise && bank.together(m, g) - evidence.ratio > TOGETHER;
-        sum(evidence, now);
+        boolean together = !noise && review.together() - evidence.ratio > TOGETHER;
+        review.date(leader, INTERVAL);
+        Sums since = review.jointSince(evidence.onset, m, g);
+        double count = since.count;
+        double shift = frozen.sd() * since.errors / since.roots;
+        double shiftU = coverage * frozen.sd() * Math.sqrt(count) / since.roots;
+        if (evidence.ramp) {
+            // over its last third a ramp is much like a step
+            review.jointSince(now - (now - evidence.onset) / 3, m, g);
+        }
         boolean gain = !noise && gain(leader);
-        bank.interval(leader, INTERVAL, interval);
-        Sums since = bank.sumsSince(evidence.onset);
-        double count = since == null ? Double.NaN : since.count;
         return new Cause(
                 leader,
                 evidence.ramp,
@@ -90,12 +91,12 @@ final class CauseFinder {
                 tellable(leader, rivals),
                 together,
                 gain,
-                new Finding.Onset(evidence.onset, interval.from, interval.to, evidence.onsetReading),
+                new Finding.Onset(evidence.onset, review.from(), review.to(), evidence.onsetReading),
                 noise ? Math.sqrt(evidence.score) : delta(evidence, now),
                 noise ? Math.sqrt(evidence.score) : frozen.sd() * delta(evidence, now),
                 noise ? coverage * Math.sqrt(evidence.score / (2 * count)) : frozen.sd() * spread(evidence, now),
-                since == null ? Double.NaN : frozen.sd() * since.errors / count,
-                coverage * frozen.sd() / Math.sqrt(count));
+                shift,
+                shiftU);
     }
 
     /** Change now in units of s: of a ramp as far as it has come. */
@@ -117,7 +118,7 @@ final class CauseFinder {
         return List.copyOf(rivals);
     }
 
-    /** Whether the regressors of the rivals are no more than 95 % the same; on the sums of {@link #sum}. */
+    /** Whether the regressors of the rivals are no more than 95 % the same; on M and g as they stand. */
     private boolean tellable(int leader, List<Integer> rivals) {
         if (leader == q) {
             return true;
@@ -140,13 +141,7 @@ final class CauseFinder {
         return bank.evidence(leader).ratio - next;
     }
 
-    /** Sums for what is asked of several unknowns at once: of a ramp over its last third, in which it is much like a step. */
-    private void sum(Evidence evidence, double now) {
-        bank.sumsSince(evidence.ramp ? now - (now - evidence.onset) / 3 : evidence.onset);
-        bank.joint(m, g);
-    }
-
-    /** Whether δ = ε·θₐ, the same factor for all, does better than the leader; on the sums of {@link #sum}. */
+    /** Whether δ = ε·θₐ, the same factor for all, does better than the leader; on M and g as they stand. */
     private boolean gain(int leader) {
         double score = 0;
         double information = 0;

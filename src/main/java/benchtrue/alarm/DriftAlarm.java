@@ -5,13 +5,14 @@ import org.jspecify.annotations.Nullable;
 /** The one alarm of a relation against its reference: raised by CUSUM or bank, brought up to date, returned to normal. */
 final class DriftAlarm {
     /** Without news the alarm is brought up to date after so many judgements. */
-    private static final int REFRESH = 16;
+    private static final int REFRESH = 4;
     /** A change is over when the readings since some time are e^12.5 times likelier without it. */
     private static final double OVER = 25;
 
     private final Watched watched;
     private final AlarmBook book;
     private final Bank bank;
+    private final Review review;
     private final CauseFinder finder;
     private final DriftWords words;
     private @Nullable Cause told;
@@ -19,11 +20,12 @@ final class DriftAlarm {
     private int untilRefresh;
     private boolean stands;
 
-    DriftAlarm(Watched watched, AlarmBook book, ReferenceWatch.Frozen frozen, Bank bank) {
+    DriftAlarm(Watched watched, AlarmBook book, ReferenceWatch.Frozen frozen, Bank bank, Review review) {
         this.watched = watched;
         this.book = book;
         this.bank = bank;
-        finder = new CauseFinder(bank, frozen);
+        this.review = review;
+        finder = new CauseFinder(bank, review, frozen);
         words = new DriftWords(watched, frozen);
     }
 
@@ -47,6 +49,9 @@ final class DriftAlarm {
             return;
         }
         boolean beyond = most > limit;
+        if (beyond && !stands) {
+            bank.evaluateAll();
+        }
         if (!beyond && !(byCusum && !stands)) {
             return;
         }
@@ -69,7 +74,7 @@ final class DriftAlarm {
         Cause cause = sticky(finder.find(time));
         told = cause;
         stands = true;
-        bank.keep(cause.leader());
+        bank.onsets().keep(cause.onset().time());
         book.report(words.finding(cause, limit, time, cusumSince));
     }
 
@@ -92,7 +97,7 @@ final class DriftAlarm {
     private Finding.Onset keptOnset(Cause before, Cause found) {
         Finding.Onset old = before.onset();
         Finding.Onset now = found.onset();
-        boolean beyondMemory = old.from() < bank.oldest();
+        boolean beyondMemory = old.from() < review.oldest();
         boolean agrees = old.from() <= now.to() && now.from() <= old.to();
         return beyondMemory || (before.named() && before.ramp() == found.ramp() && !found.ramp() && agrees) ? old : now;
     }
@@ -104,12 +109,17 @@ final class DriftAlarm {
             return false;
         }
         return cause.named()
-                ? bank.against(cause, time) > OVER
-                : finder.quiet(cause.onset().time());
+                ? review.against(cause, time) > OVER
+                : review.quiet(cause.onset().time());
     }
 
     boolean stands() {
         return stands;
+    }
+
+    /** Whether its cause is not named. */
+    boolean provisional() {
+        return told == null || !told.named();
     }
 
     double most() {

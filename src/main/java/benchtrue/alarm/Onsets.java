@@ -18,6 +18,7 @@ final class Onsets {
     private final Sums[][] stretches = new Sums[LENGTHS][EACH + 1];
 
     private final int[] filled = new int[LENGTHS];
+    private final Sums[] list = new Sums[LENGTHS * EACH + 1];
     private Sums open;
     private double kept = Double.NaN;
 
@@ -30,11 +31,11 @@ final class Onsets {
         open = new Sums(regressors);
     }
 
-    void add(double[] phi, double error, double z, double time, long number) {
+    void add(double[] phi, double root, double error, double z, double time, long number) {
         if (open.count == 0) {
             open.clear(time, number);
         }
-        open.add(phi, error, z, time);
+        open.add(phi, root, error, z, time);
         if (open.count == SHORTEST) {
             open = push(0, open);
         }
@@ -107,18 +108,23 @@ final class Onsets {
         filled[length] -= newest;
     }
 
-    /** All stretches, newest first, into an array of at least {@link #most()}; the one being filled leads. */
-    int list(Sums[] into) {
+    /** Lists all stretches, newest first; the one being filled leads. */
+    int list() {
         int n = 0;
         if (open.count > 0) {
-            into[n++] = open;
+            list[n++] = open;
         }
         for (int length = 0; length < LENGTHS; length++) {
             for (int i = 0; i < filled[length]; i++) {
-                into[n++] = stretches[length][i];
+                list[n++] = stretches[length][i];
             }
         }
         return n;
+    }
+
+    /** The k-th newest stretch of the last {@link #list}. */
+    Sums listed(int k) {
+        return list[k];
     }
 
     static int most() {

@@ -12,6 +12,7 @@ final class ReferenceWatch {
     private static final double TESTABLE_LEVERAGE = 1;
     private static final int REDESIGN = 64;
     private static final int EVALUATE = 4;
+    private static final int ALL = 16;
 
     private final Watched watched;
     private final Frozen frozen;
@@ -26,6 +27,7 @@ final class ReferenceWatch {
     private double meanLeverage;
     private double z = Double.NaN;
     private double error = Double.NaN;
+    private double root = 1;
     private double leverage = Double.NaN;
     private int untilDesign;
     private int untilNext;
@@ -42,9 +44,10 @@ final class ReferenceWatch {
         this.thinning = thinning;
         int p = watched.size();
         int q = watched.hasConstantTerm() ? p : p + 1;
-        bank = new Bank(widened(frozen.covariance, p, q), frozen.nu);
+        double[] covariance = widened(frozen.covariance, p, q);
+        bank = new Bank(covariance, frozen.nu);
         suspense = new Suspense(bank);
-        alarm = new DriftAlarm(watched, book, frozen, bank);
+        alarm = new DriftAlarm(watched, book, frozen, bank, new Review(bank, covariance));
         row = new double[q];
     }
 
@@ -76,7 +79,7 @@ final class ReferenceWatch {
         int p = frozen.values.length;
         double difference = response;
         double quadratic = 0;
-        double root = Math.sqrt(weight);
+        root = Math.sqrt(weight);
         row[row.length - 1] = root;
         for (int i = 0; i < p; i++) {
             difference -= phi[i] * frozen.values[i];
@@ -111,8 +114,7 @@ final class ReferenceWatch {
         take(number, time, outlier);
         boolean beyond = cusum.beyond(design.limit());
         if (--untilEvaluation <= 0 || beyond) {
-            untilEvaluation = EVALUATE;
-            bank.evaluate();
+            evaluate();
             alarm.judge(time, cusum, beyond, bankLimit, doubt);
         }
         if (beyond && doubt == null) {
@@ -120,12 +122,26 @@ final class ReferenceWatch {
         }
     }
 
+    /** An alarm that stands is brought up to date less often, from evidence of one and the same reading. */
+    private void evaluate() {
+        if (alarm.stands() && !alarm.provisional()) {
+            untilEvaluation = ALL;
+            bank.evaluateAll();
+        } else if (alarm.stands()) {
+            untilEvaluation = EVALUATE;
+            bank.evaluateAll();
+        } else {
+            untilEvaluation = EVALUATE;
+            bank.evaluate();
+        }
+    }
+
     /** Once an alarm stands the live model, which follows, knows better what an outlier is. */
     private void take(long number, double time, boolean outlier) {
         if (!alarm.stands()) {
-            suspense.add(row, error, z, time, number);
+            suspense.add(row, root, error, z, time, number);
         } else if (!outlier) {
-            bank.add(row, error, z, time, number);
+            bank.add(row, root, error, z, time, number);
         }
     }
 

@@ -3,7 +3,7 @@ package benchtrue.alarm;
 import java.util.Arrays;
 
 /**
- * Sums over readings that a change is judged by, for q regressors φ and an error e in standard deviations: n, Σz², Σe, Σφφᵀ,
+ * Sums over readings that a change is judged by, for q regressors φ and an error e in standard deviations: n, Σz², Σe, Σ√w, Σφφᵀ,
  * Σvφφᵀ, Σv²φᵢ², Σφe and Σvφe, with v the time in s since {@link #start}. Matrices are q×q, row by row.
  */
 final class Sums {
@@ -16,6 +16,7 @@ final class Sums {
     long count;
     double squares;
     double errors;
+    double roots;
     double start;
     long firstReading;
 
@@ -38,11 +39,12 @@ final class Sums {
         count = 0;
         squares = 0;
         errors = 0;
+        roots = 0;
         start = from;
         firstReading = reading;
     }
 
-    void add(double[] phi, double error, double z, double time) {
+    void add(double[] phi, double root, double error, double z, double time) {
         double v = time - start;
         for (int i = 0, at = 0; i < q; i++) {
             double f = phi[i];
@@ -57,6 +59,7 @@ final class Sums {
         }
         squares += z * z;
         errors += error;
+        roots += root;
         count++;
     }
 
@@ -74,9 +77,20 @@ final class Sums {
         }
         squares += earlier.squares;
         errors += earlier.errors;
+        roots += earlier.roots;
         count += earlier.count;
         start = earlier.start;
         firstReading = earlier.firstReading;
+    }
+
+    /** Takes in Σφφᵀ and Σφe alone. */
+    void vouch(Sums other) {
+        for (int at = 0; at < products.length; at++) {
+            products[at] += other.products[at];
+        }
+        for (int i = 0; i < q; i++) {
+            scores[i] += other.scores[i];
+        }
     }
 
     void copy(Sums other) {
@@ -88,6 +102,7 @@ final class Sums {
         count = other.count;
         squares = other.squares;
         errors = other.errors;
+        roots = other.roots;
         start = other.start;
         firstReading = other.firstReading;
     }

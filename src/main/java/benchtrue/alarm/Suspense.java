@@ -14,6 +14,7 @@ final class Suspense {
 
     private final Bank bank;
     private final double[][] phi;
+    private final double[] roots = new double[ESTABLISHED];
     private final double[] errors = new double[ESTABLISHED];
     private final double[] standardised = new double[ESTABLISHED];
     private final double[] times = new double[ESTABLISHED];
@@ -28,18 +29,19 @@ final class Suspense {
     }
 
     /** @param row read and copied */
-    void add(double[] row, double error, double z, double time, long number) {
+    void add(double[] row, double root, double error, double z, double time, long number) {
         boolean far = Math.abs(z) > CLIP;
         if (!far || up != z > 0) {
             release();
             established = false;
         }
         if (!far || established) {
-            bank.add(row, error, z, time, number);
+            bank.add(row, root, error, z, time, number);
             return;
         }
         up = z > 0;
         System.arraycopy(row, 0, phi[waiting], 0, row.length);
+        roots[waiting] = root;
         errors[waiting] = error;
         standardised[waiting] = z;
         times[waiting] = time;
@@ -61,7 +63,7 @@ final class Suspense {
         for (int i = 0; i < waiting; i++) {
             double z = standardised[i];
             double kept = clipped ? Math.max(-CLIP, Math.min(CLIP, z)) : z;
-            bank.add(phi[i], errors[i] * (kept / z), kept, times[i], numbers[i]);
+            bank.add(phi[i], roots[i], errors[i] * (kept / z), kept, times[i], numbers[i]);
         }
         waiting = 0;
     }
