@@ -97,8 +97,10 @@ public final class LackOfFit {
             lowest[j] = Math.min(lowest[j], setting[j]);
             highest[j] = Math.max(highest[j], setting[j]);
         }
-        enter(setting);
-        Group group = groups.computeIfAbsent(key(cell, direction), k -> new Group(settings, direction));
+        boolean moved = enter(setting);
+        Group group = moved || last == null
+                ? groups.computeIfAbsent(key(cell, direction), k -> new Group(settings, direction))
+                : last;
         group.add(setting, residual);
         if (group == last) {
             group.steps += (residual - lastResidual) * (residual - lastResidual);
@@ -114,16 +116,19 @@ public final class LackOfFit {
         }
     }
 
-    /** Sets the present cell, and for each setting that changed the side from which it came. */
-    private void enter(double[] setting) {
+    /** Sets the present cell, and for each setting that changed the side from which it came; whether any did. */
+    private boolean enter(double[] setting) {
+        boolean moved = !begun;
         for (int j = 0; j < settings; j++) {
             long now = place(j, setting[j]);
             if (begun && now != cell[j]) {
                 direction[j] = now > cell[j] ? 1 : -1;
             }
+            moved |= now != cell[j];
             cell[j] = now;
         }
         begun = true;
+        return moved;
     }
 
     /** While every setting may have a cell of its own, equal means equal; the place then keeps the order of the numbers. */

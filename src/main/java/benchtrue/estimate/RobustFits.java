@@ -8,6 +8,7 @@ import java.util.Locale;
 /**
  * Two fits beside least squares that single wild readings do not move. Arrays have p entries.
  *
+ * @param leastSquares over the same rows
  * @param huber Huber's estimate with c = 1.345
  * @param leastAbsolute least absolute deviations
  * @param scale of the residuals about Huber's fit: their median size over 0.6745
@@ -15,7 +16,14 @@ import java.util.Locale;
  * @param coarse whether the response takes so few values that least absolute deviations runs along its steps
  * @param stride every how many-th reading that was
  */
-public record RobustFits(double[] huber, double[] leastAbsolute, double scale, int rows, long stride, boolean coarse) {
+public record RobustFits(
+        double[] leastSquares,
+        double[] huber,
+        double[] leastAbsolute,
+        double scale,
+        int rows,
+        long stride,
+        boolean coarse) {
     /** Rows for each different value of the response above which it is coarse (common practice, no source). */
     private static final int SHARED = 4;
 
@@ -27,10 +35,19 @@ public record RobustFits(double[] huber, double[] leastAbsolute, double scale, i
 
     /** @param start the least-squares estimates, all determined */
     public static RobustFits of(ThinnedRows rows, double[] start) {
-        double[] leastAbsolute = LeastAbsoluteFit.of(rows, start);
+        double[] same = rows.stride() == 1 ? start : leastSquares(rows);
+        double[] leastAbsolute = LeastAbsoluteFit.of(rows, same);
         double[] huber = HuberFit.of(rows, leastAbsolute);
         double scale = HuberFit.scale(rows, huber);
-        return new RobustFits(huber, leastAbsolute, scale, rows.size(), rows.stride(), coarse(rows));
+        return new RobustFits(same, huber, leastAbsolute, scale, rows.size(), rows.stride(), coarse(rows));
+    }
+
+    private static double[] leastSquares(ThinnedRows rows) {
+        BlockQr qr = new BlockQr(rows.unknowns());
+        for (int i = 0; i < rows.size(); i++) {
+            qr.add(rows.row(i), rows.row(i)[rows.unknowns()], 1);
+        }
+        return qr.fit().estimates();
     }
 
     private static boolean coarse(ThinnedRows rows) {
@@ -46,15 +63,15 @@ public record RobustFits(double[] huber, double[] leastAbsolute, double scale, i
      * A sentence for each unknown of which a robust fit is further than U from least squares, or one that none is.
      *
      * @param sd s of the least-squares fit
-     * @param expanded U of its estimates
+     * @param expanded U of its estimates over all rows: over a kth part of them it is taken √k times as large
      */
-    public List<String> sentences(
-            List<String> names, List<String> units, double[] estimates, double sd, double[] expanded) {
+    public List<String> sentences(List<String> names, List<String> units, double sd, double[] expanded) {
         List<String> sentences = new ArrayList<>();
-        for (int j = 0; j < estimates.length; j++) {
-            compare(sentences, "Huber", names.get(j), units.get(j), huber[j], estimates[j], expanded[j]);
+        for (int j = 0; j < huber.length; j++) {
+            double u = expanded[j] * Math.sqrt((double) stride);
+            compare(sentences, "Huber", names.get(j), units.get(j), huber[j], leastSquares[j], u);
             if (!coarse) {
-                compare(sentences, LEAST, names.get(j), units.get(j), leastAbsolute[j], estimates[j], expanded[j]);
+                compare(sentences, LEAST, names.get(j), units.get(j), leastAbsolute[j], leastSquares[j], u);
             }
         }
         if (coarse) {
@@ -93,6 +110,6 @@ public record RobustFits(double[] huber, double[] leastAbsolute, double scale, i
     }
 
     private String of() {
-        return stride == 1 ? "" : " (on every " + stride + ". reading)";
+        return stride == 1 ? "" : " (on one reading in " + stride + ")";
     }
 }

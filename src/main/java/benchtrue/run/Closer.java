@@ -65,7 +65,7 @@ final class Closer {
     private List<GroupClosing> analysed() {
         SecondPass pass = new SecondPass(engine, record);
         Systematic systematic = new Systematic(sheet);
-        Systematic noise = Systematic.ofNoise(sheet);
+        Systematic noise = engine.noise().again(sheet);
         List<BatchSink> batches = engine.groups().stream().map(BatchSink::new).toList();
         pass.run(batches);
         List<ResidualSink> residuals = batches.stream()

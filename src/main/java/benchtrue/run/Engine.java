@@ -214,6 +214,11 @@ public final class Engine {
         return rows;
     }
 
+    /** Rows with each channel that stands in a regressor moved by its declared noise. */
+    Systematic noise() {
+        return noise;
+    }
+
     List<Exclusion> exclusions() {
         return exclusions;
     }

@@ -143,8 +143,7 @@ final class ModelTests {
         List<UnknownSpec> unknowns = group.unknowns();
         List<String> names = unknowns.stream().map(UnknownSpec::name).toList();
         List<String> units = unknowns.stream().map(u -> u.unit().symbol()).toList();
-        sentences.addAll(RobustFits.of(rows, fit.estimates())
-                .sentences(names, units, fit.estimates(), fit.residualSd(), expanded));
+        sentences.addAll(RobustFits.of(rows, fit.estimates()).sentences(names, units, fit.residualSd(), expanded));
         for (int i = 0; i < names.size(); i++) {
             inputNoise(sentences, unknowns.get(i), effect(i, expanded[i]));
         }

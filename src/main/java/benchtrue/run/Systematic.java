@@ -45,6 +45,18 @@ final class Systematic {
         return new Systematic(sheet, Systematic::noise);
     }
 
+    /** The same channels with rows of their own, for another pass over the run. */
+    Systematic again(BenchSheet sheet) {
+        Systematic again = ofNoise(sheet);
+        names.forEach(again::felt);
+        again.dropUnfelt();
+        return again;
+    }
+
+    private void felt(String name) {
+        felt(names.indexOf(name));
+    }
+
     private static double noise(Channel channel) {
         double sd = Double.isNaN(channel.noise()) ? 0 : channel.noise();
         return sd > 0 ? InputNoise.standard(sd, Double.isNaN(channel.resolution()) ? 0 : channel.resolution()) : 0;

@@ -94,12 +94,12 @@ final class RobustFitsTest {
         assertThat(Math.abs(estimates[0] - 1.43)).isGreaterThan(0.03);
         assertThat(robust.leastAbsolute()[0]).isEqualTo(1.43, within(1e-3));
         assertThat(robust.huber()[0]).isEqualTo(1.43, within(2e-3));
-        List<String> sentences = robust.sentences(List.of("E", "r"), List.of("V", "Ω"), estimates, 0.19, u);
+        List<String> sentences = robust.sentences(List.of("E", "r"), List.of("V", "Ω"), 0.19, u);
         assertThat(sentences)
                 .anySatisfy(s -> assertThat(s).startsWith("Huber puts E at 1.4").contains(" V"));
         assertThat(robust.scale()).isEqualTo(0.0015, within(0.0003));
         assertThat(sentences).anySatisfy(s -> assertThat(s).endsWith("the few large ones make s = 0.190."));
-        assertThat(robust.sentences(List.of("E", "r"), List.of("V", "Ω"), robust.huber(), 0.002, new double[] {1, 1}))
+        assertThat(robust.sentences(List.of("E", "r"), List.of("V", "Ω"), 0.002, new double[] {1, 1}))
                 .containsExactly("Huber's fit and least absolute deviations lie within U of least squares.");
     }
 
