@@ -1,7 +1,7 @@
 package benchtrue.cli;
 
-import benchtrue.record.Failure;
 import benchtrue.record.RunFiles;
+import benchtrue.source.Failure;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.LinkOption;

@@ -1,5 +1,6 @@
 package benchtrue.record;
 
+import benchtrue.source.Failure;
 import java.io.Closeable;
 import java.io.IOException;
 import java.io.OutputStream;

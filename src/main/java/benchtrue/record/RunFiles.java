@@ -5,6 +5,7 @@ import benchtrue.run.EstimateRow;
 import benchtrue.run.Event;
 import benchtrue.run.RunListener;
 import benchtrue.sheet.BenchSheet;
+import benchtrue.source.Failure;
 import java.io.Closeable;
 import java.io.IOException;
 import java.io.InputStream;

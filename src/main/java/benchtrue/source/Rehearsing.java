@@ -33,31 +33,37 @@ public final class Rehearsing {
      * @param rehearsal the sheet's own
      */
     public static Rehearsed write(Path sheetFile, BenchSheet sheet, Rehearsal rehearsal, Path out, long seed) {
+        Path readings = out.resolve(READINGS + UNFINISHED);
+        Path raw = out.resolve(RAW + UNFINISHED);
         try {
             String foreign = foreign(sheetFile, out);
             if (foreign != null) {
                 return refused(out, foreign);
             }
             Files.createDirectories(out);
-            Path readings = out.resolve(READINGS + UNFINISHED);
-            Path raw = out.resolve(RAW + UNFINISHED);
-            long count = writeRows(sheet, rehearsal, seed, readings, raw);
-            boolean same = isNewOrSame(readings, out.resolve(READINGS)) && isNewOrSame(raw, out.resolve(RAW));
-            if (!same) {
-                Files.delete(readings);
+            try {
+                long count = writeRows(sheet, rehearsal, seed, readings, raw);
+                if (!isNewOrSame(readings, out.resolve(READINGS)) || !isNewOrSame(raw, out.resolve(RAW))) {
+                    return refused(out, "the folder holds other readings, which are not replaced");
+                }
+                finish(sheetFile, out, readings, raw);
+                return new Rehearsed.Written(count);
+            } finally {
+                Files.deleteIfExists(readings);
                 Files.deleteIfExists(raw);
-                return refused(out, "the folder holds other readings, which are not replaced");
             }
-            Files.move(readings, out.resolve(READINGS), StandardCopyOption.REPLACE_EXISTING);
-            if (Files.exists(raw)) {
-                Files.move(raw, out.resolve(RAW), StandardCopyOption.REPLACE_EXISTING);
-            }
-            if (!Files.exists(out.resolve(SHEET))) {
-                Files.copy(sheetFile, out.resolve(SHEET));
-            }
-            return new Rehearsed.Written(count);
         } catch (IOException e) {
-            return refused(out, "cannot be written (" + e + ")");
+            return refused(out, "cannot be written: " + Failure.words(e));
+        }
+    }
+
+    private static void finish(Path sheetFile, Path out, Path readings, Path raw) throws IOException {
+        Files.move(readings, out.resolve(READINGS), StandardCopyOption.REPLACE_EXISTING);
+        if (Files.exists(raw)) {
+            Files.move(raw, out.resolve(RAW), StandardCopyOption.REPLACE_EXISTING);
+        }
+        if (!Files.exists(out.resolve(SHEET))) {
+            Files.copy(sheetFile, out.resolve(SHEET));
         }
     }
 

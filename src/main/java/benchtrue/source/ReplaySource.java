@@ -4,7 +4,6 @@ import benchtrue.sheet.BenchSheet;
 import benchtrue.sheet.Mistake;
 import java.io.IOException;
 import java.nio.file.Files;
-import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
@@ -24,7 +23,11 @@ public final class ReplaySource {
             }
             return opened;
         } catch (IOException e) {
-            return refused(readingsCsv, 0, reason(e), "check its path and whether you may read it");
+            return refused(
+                    readingsCsv,
+                    0,
+                    "cannot be read: " + Failure.words(e),
+                    "check its path and whether you may read it");
         }
     }
 
@@ -71,13 +74,5 @@ public final class ReplaySource {
 
     private static Opened refused(Path path, int line, String message, String remedy) {
         return new Opened.Refused(List.of(new Mistake(path.toString(), line, 0, message, remedy)));
-    }
-
-    private static String reason(IOException e) {
-        if (e instanceof NoSuchFileException) {
-            return "there is no such file";
-        }
-        String why = e.getMessage();
-        return "cannot be read" + (why == null ? "" : ": " + why);
     }
 }

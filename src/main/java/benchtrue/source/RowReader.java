@@ -42,8 +42,7 @@ final class RowReader implements Rows {
                 case END -> into.is(Outcome.END, rows.line(), "");
             }
         } catch (IOException e) {
-            String why = e.getMessage();
-            into.is(Outcome.FAILED, rows.line(), "could not be read on: " + (why == null ? e.toString() : why));
+            into.is(Outcome.FAILED, rows.line(), "could not be read on: " + Failure.words(e));
         }
     }
 

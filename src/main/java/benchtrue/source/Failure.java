@@ -1,4 +1,4 @@
-package benchtrue.record;
+package benchtrue.source;
 
 import java.io.IOException;
 import java.nio.file.AccessDeniedException;
