@@ -2,11 +2,20 @@ package benchtrue.cli;
 
 import benchtrue.sheet.BenchSheet;
 import benchtrue.sheet.Rehearsal;
+import benchtrue.source.Failure;
+import benchtrue.source.LinePlayer;
 import benchtrue.source.Rehearsed;
+import benchtrue.source.RehearsedLines;
 import benchtrue.source.Rehearsing;
+import java.io.BufferedReader;
+import java.io.IOException;
+import java.io.InputStreamReader;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
+import java.util.List;
 import java.util.concurrent.Callable;
 import org.jspecify.annotations.Nullable;
+import picocli.CommandLine.ArgGroup;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.Parameters;
@@ -22,31 +31,79 @@ final class RehearseCommand implements Callable<Integer> {
     @SuppressWarnings("NullAway.Init")
     private Path sheetFile;
 
-    @Option(names = "--out", required = true, paramLabel = "RUN", description = "Run folder to write; it must be new.")
+    @ArgGroup(multiplicity = "1")
     @SuppressWarnings("NullAway.Init")
-    private Path out;
+    private Target target;
 
     @Option(names = "--seed", paramLabel = "N", description = "Seed of the noise; by default the sheet's.")
     private @Nullable Long seed;
+
+    @Option(names = "--yes", description = "Send to a real port without asking.")
+    private boolean yes;
+
+    /** Where the readings go: one of the two. */
+    static final class Target {
+        @Option(names = "--out", required = true, paramLabel = "RUN", description = "Write this run folder.")
+        private @Nullable Path out;
+
+        @Option(
+                names = "--onto",
+                required = true,
+                paramLabel = "PORT",
+                description = "Play the lines out onto this port at their real pace.")
+        private @Nullable String port;
+    }
 
     RehearseCommand(Output output) {
         this.output = output;
     }
 
     @Override
-    public Integer call() throws Refusal {
+    public Integer call() throws Refusal, InterruptedException {
         BenchSheet sheet = RunFolder.sheet(sheetFile, output);
         Rehearsal rehearsal = sheet.rehearsal();
         if (rehearsal == null) {
             throw new Refusal(sheetFile + ": has no [rehearsal]; add one as docs/rehearsal.md shows");
         }
         long used = seed == null ? rehearsal.seed() : seed;
+        if (target.out != null) {
+            write(sheet, rehearsal, target.out, used);
+        } else if (target.port != null) {
+            play(new RehearsedLines(sheet, rehearsal, used), target.port);
+        }
+        return ExitStatus.NOTHING_FOUND.code();
+    }
+
+    private void write(BenchSheet sheet, Rehearsal rehearsal, Path out, long used) throws Refusal {
         Rehearsed rehearsed = Rehearsing.write(sheetFile, sheet, rehearsal, out, used);
         if (rehearsed instanceof Rehearsed.Refused refused) {
             throw new Refusal(refused.mistake().toString());
         }
         long readings = ((Rehearsed.Written) rehearsed).readings();
         output.line(readings + " readings with seed " + used + " in " + out + ". To see them: benchtrue replay " + out);
-        return ExitStatus.NOTHING_FOUND.code();
+    }
+
+    private void play(RehearsedLines lines, String port) throws Refusal, InterruptedException {
+        if (!LinePlayer.isPseudoTerminal(port) && !yes && !confirmed(port)) {
+            throw new Refusal(port + ": nothing was sent; use a pseudo-terminal, or confirm with yes");
+        }
+        try {
+            output.line(LinePlayer.play(lines, port, lines.line()) + " lines sent to " + port);
+        } catch (IOException e) {
+            throw new Refusal(
+                    ExitStatus.SOURCE_LOST,
+                    List.of(port + ": " + Failure.words(e) + "; check the port's name and its cable"));
+        }
+    }
+
+    private boolean confirmed(String port) throws Refusal {
+        output.ask(port + " is no pseudo-terminal. What hangs on it may obey these lines as commands: make the rig safe"
+                + " first. Send them? (yes/no)");
+        try {
+            String answer = new BufferedReader(new InputStreamReader(System.in, StandardCharsets.UTF_8)).readLine();
+            return answer != null && answer.strip().equals("yes");
+        } catch (IOException e) {
+            throw new Refusal(port + ": nothing was sent, as no answer could be read (" + Failure.words(e) + ")");
+        }
     }
 }

@@ -23,6 +23,11 @@ public final class RehearsedLines {
         rows = new SimulatedRows(sheet, rehearsal, seed);
     }
 
+    /** How the lines are sent. */
+    public LineSpec line() {
+        return line;
+    }
+
     /** Goes to the next line; false after the last. */
     public boolean next() {
         return rows.advance();
