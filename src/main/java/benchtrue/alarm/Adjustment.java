@@ -39,6 +39,15 @@ final class Adjustment {
         }
     }
 
+    /** bᵀWb. */
+    double explainedBy(double[] scores) {
+        double sum = 0;
+        for (int i = 0; i < q; i++) {
+            sum += scores[i] * explained[i];
+        }
+        return sum;
+    }
+
     /** Offers a cause the evidence for a step of the i-th regressor since the onset of the sums. */
     void offerStep(Evidence cause, Sums since, int i) {
         offer(cause, false, since, since.products, i * q, since.products[i * q + i], since.scores[i]);

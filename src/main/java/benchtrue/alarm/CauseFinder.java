@@ -19,6 +19,9 @@ final class CauseFinder {
      */
     private static final double INTERVAL = 7.35;
 
+    /** What the leader leaves unexplained may favour the wrong one by as much: this share of it is asked for as well. */
+    private static final double MISFIT = 0.25;
+
     private static final double SAME = 0.95;
 
     private final Bank bank;
@@ -71,6 +74,7 @@ final class CauseFinder {
         double lead = lead(leader);
         boolean noise = leader == q;
         boolean together = !noise && review.together() - evidence.ratio > TOGETHER;
+        double margin = noise ? 0 : MISFIT * Math.max(0, review.misfit() - evidence.ratio);
         review.date(leader, INTERVAL);
         Sums since = review.jointSince(evidence.onset, m, g);
         double count = since.count;
@@ -86,7 +90,7 @@ final class CauseFinder {
                 evidence.ramp,
                 evidence.ratio,
                 lead,
-                lead > LEAD && !together,
+                lead > LEAD + margin && !together,
                 rivals,
                 tellable(leader, rivals),
                 together,

@@ -66,7 +66,9 @@ final class DriftWords {
     private String text(Cause cause, Finding.Onset onset, double limit) {
         List<String> sentences = new ArrayList<>();
         sentences.add(watched.label() + ": " + what(cause) + since(onset));
-        sentences.add(howSure(cause, limit));
+        if (cause.ratio() > 1) {
+            sentences.add(howSure(cause, limit));
+        }
         String more = more(cause);
         if (!more.isEmpty()) {
             sentences.add(more);
@@ -140,15 +142,17 @@ final class DriftWords {
         if (isNoise(cause)) {
             return "Look for a loose lead, a new source of interference or vibration; make the rig safe first";
         }
-        if (cause.gain()) {
-            return "All coefficients seem to have changed by one factor: does " + watched.label()
-                    + " itself read wrong? Check it against a second instrument";
-        }
-        if (cause.together()) {
-            return "No single unknown explains it: several changed, or something that is not in the equation";
-        }
         if (cause.named()) {
             return "Make the rig safe before opening it: a cause is a lead";
+        }
+        if (cause.tellable()) {
+            if (cause.gain()) {
+                return "All coefficients seem to have changed by one factor: does " + watched.label()
+                        + " itself read wrong? Check it against a second instrument";
+            }
+            if (cause.together()) {
+                return "No single unknown explains it: several changed, or something that is not in the equation";
+            }
         }
         String rivals = cause.rivals().stream().map(this::name).collect(Collectors.joining(" or "));
         return cause.tellable()

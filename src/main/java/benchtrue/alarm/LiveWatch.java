@@ -5,8 +5,8 @@ package benchtrue.alarm;
  * this one sees only sudden faults; it raises an alarm of its own only while there is no reference model.
  */
 final class LiveWatch {
-    /** So many innovations must be known before their autocorrelation says how to thin them. */
-    private static final int LEARN = 200;
+    /** So many innovations must be known before their autocorrelation says how to thin them: fewer hide a slow period. */
+    private static final int LEARN = 500;
 
     private static final int REDESIGN = 64;
     /** An alarm returns to normal after so many quiet readings. */

@@ -18,6 +18,10 @@ final class Onsets {
     private final Sums[][] stretches = new Sums[LENGTHS][EACH + 1];
 
     private final int[] filled = new int[LENGTHS];
+    /** A reading beyond so many standard deviations after one within begins a stretch of its own: a large step is sharp. */
+    private static final double FAR = 4;
+
+    private boolean lastFar;
     private final Sums[] list = new Sums[LENGTHS * EACH + 1];
     private Sums open;
     private double kept = Double.NaN;
@@ -32,6 +36,11 @@ final class Onsets {
     }
 
     void add(double[] phi, double root, double error, double z, double time, long number) {
+        boolean far = Math.abs(z) > FAR;
+        if (far && !lastFar && open.count > 0) {
+            open = push(0, open);
+        }
+        lastFar = far;
         if (open.count == 0) {
             open.clear(time, number);
         }

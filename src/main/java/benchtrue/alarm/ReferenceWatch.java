@@ -140,7 +140,10 @@ final class ReferenceWatch {
     private void take(long number, double time, boolean outlier) {
         if (!alarm.stands()) {
             suspense.add(row, root, error, z, time, number);
-        } else if (!outlier) {
+            return;
+        }
+        suspense.flush();
+        if (!outlier) {
             bank.add(row, root, error, z, time, number);
         }
     }

@@ -4,6 +4,9 @@ import org.jspecify.annotations.Nullable;
 
 /** The tests of one relation: against the live model for sudden faults, against the reference model for drift. */
 public final class RelationMonitor {
+    /** An intermittent connection is over after so many readings without an outlier. */
+    private static final int GOOD_AGAIN = 5 * OutlierGate.WINDOW;
+
     private final Watched watched;
     private final Budget budget;
     private final AlarmBook book;
@@ -78,6 +81,9 @@ public final class RelationMonitor {
     private void object(String reason) {
         untested = reason;
         bound = Double.NaN;
+        if (!objected) {
+            gate.clear();
+        }
         if (!objected && reference != null) {
             reference.forgetSince(channels.troubleSince(watched.channels()));
         }
@@ -116,7 +122,7 @@ public final class RelationMonitor {
             if (reference != null) {
                 reference.forgetSince(firstOut);
             }
-        } else if (!gate.intermittent() && told) {
+        } else if (told && number - lastOut > GOOD_AGAIN) {
             book.normal(Alarm.Kind.INTERMITTENT, watched.label(), null);
         }
     }

@@ -81,6 +81,16 @@ final class Review {
         return most;
     }
 
+    /** By how much the mean squares of all readings kept, with what is known of the reference, exceed those of mere noise. */
+    double misfit() {
+        int listed = vouched();
+        double squares = 0;
+        for (int k = 0; k < listed; k++) {
+            squares += onsets.listed(k).squares - onsets.listed(k).count;
+        }
+        return squares - adjustment.explainedBy(whole.scores);
+    }
+
     /**
      * Between which times the onset of a cause lies: how far the evidence stays within a distance of its best, and to the next
      * onset beyond on either side. To be read from {@link #from} and {@link #to}.

@@ -68,6 +68,11 @@ final class Suspense {
         waiting = 0;
     }
 
+    /** Passes on what waits as it is: it was no outlier. */
+    void flush() {
+        pass(false);
+    }
+
     void clear() {
         waiting = 0;
         established = false;
