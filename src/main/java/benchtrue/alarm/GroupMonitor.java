@@ -46,6 +46,19 @@ public final class GroupMonitor {
     }
 
     /**
+     * Compares the estimates with what the sheet calls plausible: a unit or a sign mistaken is an alarm until it is mended. To
+     * be called now and then, with estimates that are determined.
+     *
+     * @param estimates one for each unknown, in its unit, NaN where not known; read
+     * @param uncertainties standard uncertainties of these; read
+     */
+    public void compareWithPlausible(double[] estimates, double[] uncertainties) {
+        for (RelationMonitor relation : relations) {
+            relation.compareWithPlausible(estimates, uncertainties);
+        }
+    }
+
+    /**
      * Why the present model must not yet become the reference by itself, apart from the sheet's time.
      *
      * @param settled whether each unknown is determined and settled

@@ -1,9 +1,14 @@
 package benchtrue.alarm;
 
+import benchtrue.sheet.UnknownSpec;
 import org.jspecify.annotations.Nullable;
 
 /** The tests of one relation: against the live model for sudden faults, against the reference model for drift. */
 public final class RelationMonitor {
+    /** Degrees of freedom below which a few values that repeat by their resolution make the noise look like none. */
+    private static final double KNOWN = 10;
+    /** Standard uncertainties by which an estimate must be outside what is plausible. */
+    private static final double SURE = 4;
     /** An intermittent connection is over after so many readings without an outlier. */
     private static final int GOOD_AGAIN = 5 * OutlierGate.WINDOW;
 
@@ -97,7 +102,7 @@ public final class RelationMonitor {
         if (leverage > 1) {
             return "new operating point: the prediction is an extrapolation";
         }
-        if (!(nu >= 1)) {
+        if (!(nu >= KNOWN)) {
             return "the noise is not known yet";
         }
         return Double.isNaN(budget.perReading()) ? "the interval of readings is not known yet" : "";
@@ -148,6 +153,56 @@ public final class RelationMonitor {
             return "outliers that may be a loose connection";
         }
         return channels.unresolved(watched.channels()) ? "a channel repeats its value and may be stuck" : null;
+    }
+
+    /** Tells of the first unknown that another unit or sign would make plausible. */
+    void compareWithPlausible(double[] estimates, double[] uncertainties) {
+        boolean unit = false;
+        boolean sign = false;
+        for (int i = 0; i < own.length && !unit && !sign; i++) {
+            UnknownSpec unknown = watched.unknowns().get(i);
+            double estimate = estimates[watched.places()[i]];
+            double u = uncertainties[watched.places()[i]];
+            if (unknown.plausible() == null || Double.isNaN(u)) {
+                continue;
+            }
+            UnitSuspicion.Suspicion suspicion = UnitSuspicion.of(estimate, SURE * u, unknown.plausible());
+            sign = suspicion.sign();
+            unit = !sign && !suspicion.none();
+            if (sign || unit) {
+                tellPlausible(sign ? Alarm.Kind.SIGN : Alarm.Kind.UNIT, i, estimate, suspicion);
+            }
+        }
+        settle(Alarm.Kind.UNIT, unit);
+        settle(Alarm.Kind.SIGN, sign);
+    }
+
+    private void settle(Alarm.Kind kind, boolean found) {
+        if (!found && book.stands(kind, watched.label(), null)) {
+            book.normal(kind, watched.label(), null);
+        }
+    }
+
+    private void tellPlausible(Alarm.Kind kind, int i, double estimate, UnitSuspicion.Suspicion suspicion) {
+        if (book.stands(kind, watched.label(), null)) {
+            return;
+        }
+        UnknownSpec unknown = watched.unknowns().get(i);
+        book.report(new Finding(
+                kind,
+                watched.label(),
+                null,
+                unknown.name(),
+                new Finding.Onset(Double.NaN, Double.NaN, clock.running(), 0),
+                estimate,
+                Double.NaN,
+                unknown.unit().symbol(),
+                null,
+                false,
+                false,
+                Alarm.Priority.NEXT_STOP,
+                UnitSuspicion.words(
+                        unknown, estimate, suspicion, watched.factors().get(i))));
     }
 
     /** Takes its part of the group's model as its reference. */

@@ -131,6 +131,9 @@ public final class Engine {
             Settling settling = settlings.get(g);
             if (settling.due(reading)) {
                 settling.evaluate(reading, time, monitor.book().anyStanding());
+                if (settling.allDetermined()) {
+                    groups.get(g).compareWithPlausible();
+                }
                 adoptions.get(g).consider(settling.allSettled(), reading, time);
             }
         }

@@ -229,6 +229,12 @@ final class GroupRun {
         }
     }
 
+    /** Looks for a unit or a sign mistaken. */
+    void compareWithPlausible() {
+        estimator.uncertainties(uncertainties);
+        monitor.compareWithPlausible(estimates, uncertainties);
+    }
+
     /** Values with their uncertainties as they stand. */
     Estimates now() {
         int p = estimates.length;
