@@ -218,7 +218,10 @@ public final class Estimator {
             }
             applied.apply(phi, gain, effective);
         }
-        information.add(relation, phi, response, weight);
+        double squared = information.add(relation, phi, response, weight);
+        if (!determined && squared >= 0) {
+            noise[relation].add(squared); // readings that repeat an operating point tell the noise before they tell θ
+        }
         usedWeights += 1;
         usedSquares += 1;
         rows++;

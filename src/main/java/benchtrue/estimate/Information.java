@@ -81,11 +81,12 @@ final class Information {
         first[0].ageAlong(phi, mu, column, old);
     }
 
-    void add(int k, double[] phi, double y, double w) {
-        first[k].add(phi, y, w);
+    /** @return as {@link InformationFactor#add}, of what this relation alone knows */
+    double add(int k, double[] phi, double y, double w) {
         if (forgets) {
             second[k].add(phi, 0, w);
         }
+        return first[k].add(phi, y, w);
     }
 
     void weigh(int k, double weight) {

@@ -41,11 +41,17 @@ final class InformationFactor {
         }
     }
 
-    /** A ← A + w·φφᵀ, with the response y. φ is read. */
-    void add(double[] phi, double y, double w) {
+    /**
+     * A ← A + w·φφᵀ, with the response y. φ is read.
+     *
+     * @return the squared recursive residual, what the row adds to the residual sum of squares; NaN where it adds none, because
+     *     it was the first to tell something of one of the unknowns
+     */
+    double add(double[] phi, double y, double w) {
         System.arraycopy(phi, 0, x, 0, p);
         x[p] = y;
-        rotateIn(w);
+        double left = rotateIn(w);
+        return left > 0 ? left * x[p] * x[p] : Double.NaN;
     }
 
     /** Adds all of another one, each row weighted by {@code weight}. */
@@ -65,8 +71,8 @@ final class InformationFactor {
         System.arraycopy(r, i * stride + i + 1, into, i + 1, p - i);
     }
 
-    /** Rotates the row in {@code x} in, unknown by unknown. */
-    private void rotateIn(double weight) {
+    /** Rotates the row in {@code x} in, unknown by unknown, and gives the weight with which its rest is left over. */
+    private double rotateIn(double weight) {
         double w = weight;
         for (int i = 0; i < p && w > 0; i++) {
             double xi = x[i];
@@ -90,6 +96,7 @@ final class InformationFactor {
                 r[row + j] = c < 0.5 ? Math.fma(s, old, c * r[row + j]) : Math.fma(s, left, r[row + j]);
             }
         }
+        return w;
     }
 
     /**

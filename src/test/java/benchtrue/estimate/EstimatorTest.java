@@ -19,6 +19,23 @@ final class EstimatorTest {
                 : new Forgetting(Forgetting.Kind.EXPONENTIAL, Memory.Readings.ofFactor(factor));
     }
 
+    /** By hand: means 2 and 5 at two points, squared deviations 0.02 and 0.02 with 4 − 2 degrees of freedom. */
+    @Test
+    void readingsAtOnePointTellTheNoiseBeforeTheUnknownsAreDetermined() {
+        Estimator estimator = new Estimator(new boolean[] {true, false}, 1, Forgetting.NONE);
+        double[][] rows = {{0.3, 1.9}, {0.3, 2.1}, {0.7, 4.9}, {0.7, 5.1}};
+        double[] expectedFreedom = {0, 1, 1, 2};
+        double[] expectedVariance = {Double.NaN, 0.02, 0.02, 0.02};
+        for (int t = 0; t < rows.length; t++) {
+            estimator.next(1);
+            estimator.predict(0, new double[] {1, rows[t][0]}, rows[t][1], 1);
+            estimator.use();
+            assertThat(estimator.degreesOfFreedom()).isEqualTo(expectedFreedom[t]);
+            assertThat(estimator.residualSd(0) * estimator.residualSd(0))
+                    .isEqualTo(expectedVariance[t], within(DOUBLE));
+        }
+    }
+
     /** Source: weighted batch solutions of invented data computed with 80 digits, at every row (folder recursive). */
     @ParameterizedTest
     @CsvSource({
