@@ -37,6 +37,9 @@ public final class Estimator {
     private final double[] gain;
     private final double[] work;
     private final double[] scratch;
+    /** Pⱼⱼ, at most p readings old. */
+    private final double[] diagonal;
+
     private Forgetting forgetting;
     private boolean usesApplied;
     private boolean determined;
@@ -53,6 +56,7 @@ public final class Estimator {
     private double leverage = Double.NaN;
     private double quadratic = Double.NaN;
     private double magnitude;
+    private int refreshed;
 
     /**
      * @param constantTerm for each unknown whether it multiplies nothing that varies
@@ -80,6 +84,7 @@ public final class Estimator {
         gain = new double[p];
         work = new double[p + 1];
         scratch = new double[p * p];
+        diagonal = new double[p];
         restart();
     }
 
@@ -266,7 +271,19 @@ public final class Estimator {
     private void learnNoise() {
         double squared = innovation * innovation / (1 / weight + quadratic * information.weight(relation));
         noise[relation].add(squared);
-        score.add(gain, innovation * usedWeights, forgettingFactor());
+        refreshDiagonal(refreshed);
+        refreshed = refreshed + 1 == p ? 0 : refreshed + 1;
+        double effective = weight * information.weight(relation);
+        score.add(gain, diagonal, effective * innovation / (1 + leverage) * Math.sqrt(usedWeights), forgettingFactor());
+    }
+
+    /** Pⱼⱼ by one substitution: one unknown a reading is often enough for what it serves. */
+    private void refreshDiagonal(int j) {
+        InformationFactor joint = information.joint();
+        Arrays.fill(work, 0);
+        work[j] = 1;
+        joint.eliminate(work, 0, work);
+        diagonal[j] = joint.leverage(work);
     }
 
     private double forgettingFactor() {
@@ -291,6 +308,9 @@ public final class Estimator {
             }
             determined = true;
             sinceDetermined = 0;
+            for (int j = 0; j < p; j++) {
+                refreshDiagonal(j);
+            }
         }
         sinceDetermined += memoryShare();
         joint.solve(theta);

@@ -4,9 +4,9 @@ import java.util.Arrays;
 
 /**
  * How the score of each unknown is autocorrelated at lag 1, and by how much that widens its uncertainty: √((1+ρ)/(1−ρ)). The
- * score is (Pφ)ⱼ·e·Σf; without the factor Σf it would shrink as the readings grow and the start would dominate. ρ has a
- * memory of at least 100 readings, and counts only where it is positive and more than two of its own standard deviations
- * from 0: a chance ρ must not narrow an uncertainty.
+ * score is w·(Pφ)ⱼ·e·√(Σf/Pⱼⱼ)/(1 + wφᵀPφ): of about the same size throughout, whereas (Pφ)ⱼ·e alone is so large while P is
+ * that the start would dominate for good. ρ has a memory of at least 100 readings, and counts only where it is positive and
+ * more than two of its own standard deviations from 0: a chance ρ must not narrow an uncertainty.
  */
 final class ScoreMemory {
     private static final double LONGEST_FORGETTING = 1 - 1.0 / 100;
@@ -36,15 +36,16 @@ final class ScoreMemory {
 
     /**
      * @param gain Pφ, one for each unknown
-     * @param scale e·Σf
+     * @param diagonal Pⱼⱼ of each
+     * @param scale what else the score is made of
      * @param factor of the estimator's forgetting at this reading
      */
-    void add(double[] gain, double scale, double factor) {
+    void add(double[] gain, double[] diagonal, double scale, double factor) {
         double kept = Math.max(factor, LONGEST_FORGETTING);
         count = kept * count + 1;
         squaredCount = kept * kept * squaredCount + 1;
         for (int j = 0; j < last.length; j++) {
-            double score = gain[j] * scale;
+            double score = gain[j] * scale / Math.sqrt(diagonal[j]);
             squares[j] = kept * squares[j] + score * score;
             products[j] = kept * products[j] + score * last[j];
             last[j] = score;
