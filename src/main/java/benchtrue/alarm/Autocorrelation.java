@@ -77,4 +77,9 @@ final class Autocorrelation {
         }
         return Math.max(1, 1 + 2 * sum);
     }
+
+    /** The same, but for a sequence that no thinning makes independent the longest thinning there is. */
+    double wholeVarianceFactor() {
+        return thinning() == 0 ? LAGS[LAGS.length - 1] : varianceFactor();
+    }
 }

@@ -1,14 +1,13 @@
 package benchtrue.alarm;
 
 import benchtrue.sheet.UnknownSpec;
+import java.util.Arrays;
 import org.jspecify.annotations.Nullable;
 
 /** The tests of one relation: against the live model for sudden faults, against the reference model for drift. */
 public final class RelationMonitor {
     /** Degrees of freedom below which a few values that repeat by their resolution make the noise look like none. */
     private static final double KNOWN = 10;
-    /** Standard uncertainties by which an estimate must be outside what is plausible. */
-    private static final double SURE = 4;
     /** An intermittent connection is over after so many readings without an outlier. */
     private static final int GOOD_AGAIN = 5 * OutlierGate.WINDOW;
 
@@ -21,6 +20,9 @@ public final class RelationMonitor {
     private final StudentLimit limit = new StudentLimit();
     private final LiveWatch live;
     private final double[] own;
+    private final ResidualShapes shapes;
+    private final WarmUp warmUp = new WarmUp();
+    private final double[] estimates;
     private @Nullable ReferenceWatch reference;
     private double bound = Double.NaN;
     private double firstOut;
@@ -36,6 +38,9 @@ public final class RelationMonitor {
         this.clock = clock;
         gate = new OutlierGate(watched.holdsOut());
         live = new LiveWatch(watched, budget, book);
+        shapes = new ResidualShapes(watched, book, live.autocorrelation());
+        estimates = new double[watched.size()];
+        Arrays.fill(estimates, Double.NaN);
         own = new double[watched.size()];
     }
 
@@ -77,9 +82,43 @@ public final class RelationMonitor {
         if (untested.isEmpty() && decision instanceof Decision.Use) {
             boolean quiet = !gate.intermittent() && !channels.unresolved(watched.channels());
             live.test(t, nu, number, now, reference == null && quiet);
+            if (quiet) {
+                look(t, phi, response, now);
+            }
         }
         testReference(number, now, phi, response, weight, decision);
         return decision;
+    }
+
+    /** What the residuals of sound readings follow. */
+    private void look(double t, double[] phi, double response, double now) {
+        if (warmUp.add(t)) {
+            tellWarmUp(now);
+        }
+        if (book.standingDrift(watched.label()) != null || Double.isNaN(estimates[0])) {
+            return;
+        }
+        double residual = response;
+        for (int i = 0; i < own.length; i++) {
+            own[i] = phi[watched.places()[i]];
+            residual -= own[i] * estimates[i];
+        }
+        shapes.add(own, residual, estimates, now, clock.interval());
+    }
+
+    private void tellWarmUp(double now) {
+        book.report(Finding.ofRelation(
+                Alarm.Kind.WARM_UP,
+                watched.label(),
+                new Finding.Onset(0, 0, now, 1),
+                Double.NaN,
+                watched.unit(),
+                Alarm.Priority.NEXT_STOP,
+                watched.label()
+                        + ": the innovations have leaned to one side since the start, and the lean has halved by "
+                        + Words.number(now)
+                        + " s: the rig was warming up. Begin a new segment now that it is warm, or give"
+                        + " the sheet a warm-up time, so that what came before is not pooled"));
     }
 
     /** What a doubtful channel said since its trouble began has spoilt the tests against the reference. */
@@ -156,17 +195,20 @@ public final class RelationMonitor {
     }
 
     /** Tells of the first unknown that another unit or sign would make plausible. */
-    void compareWithPlausible(double[] estimates, double[] uncertainties) {
+    void compareWithPlausible(double[] all, double[] uncertainties) {
+        for (int i = 0; i < own.length; i++) {
+            estimates[i] = all[watched.places()[i]];
+        }
         boolean unit = false;
         boolean sign = false;
         for (int i = 0; i < own.length && !unit && !sign; i++) {
             UnknownSpec unknown = watched.unknowns().get(i);
-            double estimate = estimates[watched.places()[i]];
+            double estimate = estimates[i];
             double u = uncertainties[watched.places()[i]];
-            if (unknown.plausible() == null || Double.isNaN(u)) {
+            if (unknown.plausible() == null || unknown.constantTerm() || reference != null) {
                 continue;
             }
-            UnitSuspicion.Suspicion suspicion = UnitSuspicion.of(estimate, SURE * u, unknown.plausible());
+            UnitSuspicion.Suspicion suspicion = UnitSuspicion.of(estimate, u, unknown.plausible());
             sign = suspicion.sign();
             unit = !sign && !suspicion.none();
             if (sign || unit) {
@@ -243,6 +285,7 @@ public final class RelationMonitor {
     void restart() {
         gate.clear();
         live.clear();
+        shapes.clear();
     }
 
     LiveWatch live() {

@@ -12,6 +12,11 @@ final class UnitSuspicion {
         3.6, 4.44822, 6.894757, 9.80665, 10, 14.5038, 16.667, 25.4, 60, 100, 1000, 2 * Math.PI / 60, 0.45359237, 1.8
     };
 
+    private static final double SURE = 4;
+    private static final double KNOWN = 0.05;
+    private static final double WIDEST = 10;
+    private static final Suspicion NOTHING = new Suspicion(List.of(), false);
+
     private UnitSuspicion() {}
 
     /** What is suspected; both empty where the estimate is plausible, or nothing known would make it so. */
@@ -21,12 +26,30 @@ final class UnitSuspicion {
         }
     }
 
-    /** @param margin by how much the estimate may be wrong: as much outside the interval it is still plausible */
-    static Suspicion of(double estimate, double margin, Interval plausible) {
+    /**
+     * Nothing is suspected while the estimate is not known to 5 %, nor of an interval that is so wide that most factors would
+     * lead into it.
+     *
+     * @param u standard uncertainty of the estimate
+     */
+    static Suspicion of(double estimate, double u, Interval plausible) {
+        double margin = SURE * u;
         boolean fine = estimate >= plausible.lower() - margin && estimate <= plausible.upper() + margin;
-        if (fine || !(Math.abs(estimate) <= Double.MAX_VALUE)) {
-            return new Suspicion(List.of(), false);
+        if (fine || !(margin <= KNOWN * Math.abs(estimate))) {
+            return NOTHING;
         }
+        boolean sign = plausible.contains(-estimate);
+        return sign || !telling(plausible)
+                ? new Suspicion(List.of(), sign)
+                : new Suspicion(units(estimate, plausible), false);
+    }
+
+    private static boolean telling(Interval plausible) {
+        double ratio = plausible.upper() / plausible.lower();
+        return ratio > 0 && Math.max(ratio, 1 / ratio) <= WIDEST;
+    }
+
+    private static List<String> units(double estimate, Interval plausible) {
         List<String> units = new ArrayList<>();
         for (double factor : FACTORS) {
             if (plausible.contains(estimate / factor)) {
@@ -36,7 +59,7 @@ final class UnitSuspicion {
                 units.add("÷" + Words.number(factor));
             }
         }
-        return new Suspicion(List.copyOf(units), plausible.contains(-estimate));
+        return List.copyOf(units);
     }
 
     /** Question and what to look at. */

@@ -27,8 +27,14 @@ class UnitSuspicionTest {
     }
 
     @Test
+    void anIntervalAsWideAsTheFactorsTellsNothing() {
+        assertThat(UnitSuspicion.of(212, 0.1, new Interval(-5, 5)).none()).isTrue();
+        assertThat(UnitSuspicion.of(212, 0.1, new Interval(1, 20)).none()).isTrue();
+    }
+
+    @Test
     void whatMayBePlausibleOrIsExplainedByNothingIsNotSuspected() {
-        assertThat(UnitSuspicion.of(13.5, 1, PLAUSIBLE).none()).isTrue();
+        assertThat(UnitSuspicion.of(13.5, 0.15, PLAUSIBLE).none()).isTrue();
         assertThat(UnitSuspicion.of(1e9, 1, PLAUSIBLE).none()).isTrue();
         assertThat(UnitSuspicion.of(Double.NaN, 1, PLAUSIBLE).none()).isTrue();
     }
