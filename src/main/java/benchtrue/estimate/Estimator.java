@@ -37,7 +37,7 @@ public final class Estimator {
     private final double[] gain;
     private final double[] work;
     private final double[] scratch;
-    /** Pⱼⱼ, at most p readings old. */
+    /** Pⱼⱼ, at most 4p readings old. */
     private final double[] diagonal;
 
     private Forgetting forgetting;
@@ -130,13 +130,12 @@ public final class Estimator {
         return forgetting.kind() == Forgetting.Kind.DIRECTIONAL;
     }
 
-    private void age(double factor, double seconds) {
+    /** Whether the information changed by more than the factor. */
+    private boolean age(double factor, double seconds) {
         information.age(factor);
         ageCounts(factor);
-        if (determined) {
-            boolean gap = forgetting.memory() instanceof Memory.Seconds time && seconds > time.seconds();
-            holdFloor(1 - factor, gap);
-        }
+        boolean gap = forgetting.memory() instanceof Memory.Seconds time && seconds > time.seconds();
+        return determined && holdFloor(1 - factor, gap);
     }
 
     private void ageCounts(double factor) {
@@ -147,7 +146,7 @@ public final class Estimator {
         usedSquares *= factor * factor;
     }
 
-    private void holdFloor(double lost, boolean all) {
+    private boolean holdFloor(double lost, boolean all) {
         boolean settled = sinceDetermined >= 1;
         if (floor.refresh(information.joint(), settled) && usesApplied) {
             rewhiten();
@@ -157,6 +156,7 @@ public final class Estimator {
             applyCovariance();
             information.join();
         }
+        return held;
     }
 
     private void rewhiten() {
@@ -252,7 +252,13 @@ public final class Estimator {
         double factor = pendingAge;
         pendingAge = 1;
         if (!directional()) {
-            age(factor, elapsed);
+            if (!age(factor, elapsed)) {
+                // R̄ is the same and D smaller: so is D⁻¹ larger.
+                for (int i = 0; i < p; i++) {
+                    gain[i] /= factor;
+                }
+                return;
+            }
         } else if (determined) {
             ageCounts(factor);
             // A direction of which less is known than one reading tells has nothing to forget.
@@ -271,13 +277,15 @@ public final class Estimator {
     private void learnNoise() {
         double squared = innovation * innovation / (1 / weight + quadratic * information.weight(relation));
         noise[relation].add(squared);
-        refreshDiagonal(refreshed);
-        refreshed = refreshed + 1 == p ? 0 : refreshed + 1;
+        if ((rows & 3) == 0) {
+            refreshDiagonal(refreshed);
+            refreshed = refreshed + 1 == p ? 0 : refreshed + 1;
+        }
         double effective = weight * information.weight(relation);
         score.add(gain, diagonal, effective * innovation / (1 + leverage) * Math.sqrt(usedWeights), forgettingFactor());
     }
 
-    /** Pⱼⱼ by one substitution: one unknown a reading is often enough for what it serves. */
+    /** Pⱼⱼ by one substitution: of one unknown every fourth reading is often enough for what it serves. */
     private void refreshDiagonal(int j) {
         InformationFactor joint = information.joint();
         Arrays.fill(work, 0);
