@@ -37,8 +37,8 @@ public final class Estimator {
     private final double[] gain;
     private final double[] work;
     private final double[] scratch;
-    /** Pⱼⱼ, at most 4p readings old. */
-    private final double[] diagonal;
+    /** 1/√Pⱼⱼ, at most 4p readings old. */
+    private final double[] inverseRoots;
 
     private Forgetting forgetting;
     private boolean usesApplied;
@@ -84,7 +84,7 @@ public final class Estimator {
         gain = new double[p];
         work = new double[p + 1];
         scratch = new double[p * p];
-        diagonal = new double[p];
+        inverseRoots = new double[p];
         restart();
     }
 
@@ -278,20 +278,24 @@ public final class Estimator {
         double squared = innovation * innovation / (1 / weight + quadratic * information.weight(relation));
         noise[relation].add(squared);
         if ((rows & 3) == 0) {
-            refreshDiagonal(refreshed);
+            refreshInverseRoot(refreshed);
             refreshed = refreshed + 1 == p ? 0 : refreshed + 1;
         }
         double effective = weight * information.weight(relation);
-        score.add(gain, diagonal, effective * innovation / (1 + leverage) * Math.sqrt(usedWeights), forgettingFactor());
+        score.add(
+                gain,
+                inverseRoots,
+                effective * innovation / (1 + leverage) * Math.sqrt(usedWeights),
+                forgettingFactor());
     }
 
-    /** Pⱼⱼ by one substitution: of one unknown every fourth reading is often enough for what it serves. */
-    private void refreshDiagonal(int j) {
+    /** 1/√Pⱼⱼ by one substitution: of one unknown every fourth reading is often enough for what it serves. */
+    private void refreshInverseRoot(int j) {
         InformationFactor joint = information.joint();
         Arrays.fill(work, 0);
         work[j] = 1;
         joint.eliminate(work, 0, work);
-        diagonal[j] = joint.leverage(work);
+        inverseRoots[j] = 1 / Math.sqrt(joint.leverage(work));
     }
 
     private double forgettingFactor() {
@@ -317,7 +321,7 @@ public final class Estimator {
             determined = true;
             sinceDetermined = 0;
             for (int j = 0; j < p; j++) {
-                refreshDiagonal(j);
+                refreshInverseRoot(j);
             }
         }
         sinceDetermined += memoryShare();

@@ -88,15 +88,55 @@ final class InformationFactor {
             double s = w * xi / after;
             d[i] = after;
             w *= c;
-            int row = i * stride;
-            for (int j = i + 1; j <= p; j++) {
-                double old = x[j];
-                double left = Math.fma(-xi, r[row + j], old);
-                x[j] = left;
-                r[row + j] = c < 0.5 ? Math.fma(s, old, c * r[row + j]) : Math.fma(s, left, r[row + j]);
+            if (c < 0.5) {
+                turnFar(i, xi, c, s);
+            } else {
+                turn(i, xi, s);
             }
         }
         return w;
+    }
+
+    /** r ← c·r + s·x, x ← x − xᵢ·r: where the factor turns far, the old x says more exactly what is new. */
+    private void turnFar(int i, double xi, double c, double s) {
+        int row = i * stride;
+        for (int j = i + 1; j <= p; j++) {
+            double old = x[j];
+            double entry = r[row + j];
+            x[j] = Math.fma(-xi, entry, old);
+            r[row + j] = Math.fma(s, old, c * entry);
+        }
+    }
+
+    /** The same as r ← r + s·(x − xᵢ·r), because c = 1 − s·xᵢ. */
+    private void turn(int i, double xi, double s) {
+        int row = i * stride;
+        for (int j = i + 1; j <= p; j++) {
+            double entry = r[row + j];
+            double left = Math.fma(-xi, entry, x[j]);
+            x[j] = left;
+            r[row + j] = Math.fma(s, left, entry);
+        }
+    }
+
+    /** Σ_{j&gt;i} R̄ᵢⱼ·aⱼ in four sums side by side: a single one would wait for each of its additions. */
+    private double beyond(int i, double[] a) {
+        int row = i * stride;
+        double s0 = 0;
+        double s1 = 0;
+        double s2 = 0;
+        double s3 = 0;
+        int j = i + 1;
+        for (; j + 3 < p; j += 4) {
+            s0 = Math.fma(r[row + j], a[j], s0);
+            s1 = Math.fma(r[row + j + 1], a[j + 1], s1);
+            s2 = Math.fma(r[row + j + 2], a[j + 2], s2);
+            s3 = Math.fma(r[row + j + 3], a[j + 3], s3);
+        }
+        for (; j < p; j++) {
+            s0 = Math.fma(r[row + j], a[j], s0);
+        }
+        return (s0 + s1) + (s2 + s3);
     }
 
     /**
@@ -134,36 +174,21 @@ final class InformationFactor {
     /** Solves R̄θ = z. */
     void solve(double[] theta) {
         for (int i = p - 1; i >= 0; i--) {
-            int row = i * stride;
-            double sum = r[row + p];
-            for (int j = i + 1; j < p; j++) {
-                sum -= r[row + j] * theta[j];
-            }
-            theta[i] = sum;
+            theta[i] = r[i * stride + p] - beyond(i, theta);
         }
     }
 
     /** Solves R̄x = a in place, a and x with p entries. */
     void solveInPlace(double[] a) {
         for (int i = p - 1; i >= 0; i--) {
-            int row = i * stride;
-            double sum = a[i];
-            for (int j = i + 1; j < p; j++) {
-                sum -= r[row + j] * a[j];
-            }
-            a[i] = sum;
+            a[i] -= beyond(i, a);
         }
     }
 
     /** a ← R̄a in place. */
     void multiplyInPlace(double[] a) {
         for (int i = 0; i < p; i++) {
-            int row = i * stride;
-            double sum = a[i];
-            for (int j = i + 1; j < p; j++) {
-                sum += r[row + j] * a[j];
-            }
-            a[i] = sum;
+            a[i] += beyond(i, a);
         }
     }
 

@@ -36,16 +36,16 @@ final class ScoreMemory {
 
     /**
      * @param gain Pφ, one for each unknown
-     * @param diagonal Pⱼⱼ of each
+     * @param inverseRoots 1/√Pⱼⱼ of each
      * @param scale what else the score is made of
      * @param factor of the estimator's forgetting at this reading
      */
-    void add(double[] gain, double[] diagonal, double scale, double factor) {
+    void add(double[] gain, double[] inverseRoots, double scale, double factor) {
         double kept = Math.max(factor, LONGEST_FORGETTING);
         count = kept * count + 1;
         squaredCount = kept * kept * squaredCount + 1;
         for (int j = 0; j < last.length; j++) {
-            double score = gain[j] * scale / Math.sqrt(diagonal[j]);
+            double score = gain[j] * scale * inverseRoots[j];
             squares[j] = kept * squares[j] + score * score;
             products[j] = kept * products[j] + score * last[j];
             last[j] = score;
