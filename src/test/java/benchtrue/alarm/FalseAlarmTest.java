@@ -9,7 +9,8 @@ import org.junit.jupiter.params.provider.CsvSource;
 class FalseAlarmTest {
     private static final double PER_READING = 2e-4;
     private static final int REFERENCES = 50;
-    private static final int READINGS = 8000;
+    /** In the test; {@code -Dreadings=200000} makes it the 1e7 of a full trial. */
+    private static final int READINGS = Integer.getInteger("readings", 8000);
     /** CUSUM and bank. */
     private static final int DETECTORS = 2;
 
