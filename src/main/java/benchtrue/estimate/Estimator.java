@@ -19,17 +19,11 @@ public final class Estimator {
      */
     private static final double ROUNDING = 0x1p-40;
 
-    /** dⱼ/‖column j‖² below this: unknown j is not determined; the square of one over the largest condition, 1e12. */
-    private static final double NOT_DETERMINED = 1e-24;
-
-    /** Degrees of freedom that both relations need before one is weighed against the other. */
-    private static final double ENOUGH = 10;
-
     private final int p;
     private final Information information;
     private final InformationFloor floor;
-    private final AppliedCovariance applied;
-    private final Noise[] noise;
+    private final CovarianceInForce covariance;
+    private final RelationNoise noise;
     private final ScoreMemory score;
     private final double[] theta;
     private final double[] phi;
@@ -37,11 +31,8 @@ public final class Estimator {
     private final double[] gain;
     private final double[] work;
     private final double[] scratch;
-    /** 1/√Pⱼⱼ, at most 4p readings old. */
-    private final double[] inverseRoots;
 
     private Forgetting forgetting;
-    private boolean usesApplied;
     private boolean determined;
     private double pendingAge;
     private double elapsed;
@@ -56,7 +47,6 @@ public final class Estimator {
     private double leverage = Double.NaN;
     private double quadratic = Double.NaN;
     private double magnitude;
-    private int refreshed;
 
     /**
      * @param constantTerm for each unknown whether it multiplies nothing that varies
@@ -72,11 +62,8 @@ public final class Estimator {
         information = new Information(p, relations);
         information.forgets(forgetting.forgets());
         floor = new InformationFloor(p);
-        applied = new AppliedCovariance(p);
-        noise = new Noise[relations];
-        for (int k = 0; k < relations; k++) {
-            noise[k] = new Noise();
-        }
+        covariance = new CovarianceInForce(p, information);
+        noise = new RelationNoise(relations);
         score = new ScoreMemory(p);
         theta = new double[p];
         phi = new double[p];
@@ -84,7 +71,6 @@ public final class Estimator {
         gain = new double[p];
         work = new double[p + 1];
         scratch = new double[p * p];
-        inverseRoots = new double[p];
         restart();
     }
 
@@ -93,11 +79,9 @@ public final class Estimator {
         information.clear();
         floor.clear();
         score.clear();
-        for (Noise each : noise) {
-            each.clear();
-        }
+        noise.clear();
+        covariance.clear();
         Arrays.fill(theta, Double.NaN);
-        usesApplied = false;
         determined = false;
         pendingAge = 1;
         usedWeights = 0;
@@ -139,40 +123,22 @@ public final class Estimator {
     }
 
     private void ageCounts(double factor) {
-        for (Noise each : noise) {
-            each.age(factor);
-        }
+        noise.age(factor);
         usedWeights *= factor;
         usedSquares *= factor * factor;
     }
 
     private boolean holdFloor(double lost, boolean all) {
         boolean settled = sinceDetermined >= 1;
-        if (floor.refresh(information.joint(), settled) && usesApplied) {
-            rewhiten();
+        if (floor.refresh(information.joint(), settled)) {
+            covariance.rewhiten();
         }
         boolean held = floor.hold(information.joint(), information.floor(), theta, lost, all);
         if (held) {
-            applyCovariance();
+            covariance.follow(floor.isSet() ? floor.base() : information.joint());
             information.join();
         }
         return held;
-    }
-
-    private void rewhiten() {
-        double[] covariance = new double[p * p];
-        applied.covariance(covariance);
-        applied.start(information.joint(), covariance);
-    }
-
-    /** From now on the covariance follows the gains that are really applied. */
-    private void applyCovariance() {
-        if (!usesApplied) {
-            double[] covariance = new double[p * p];
-            information.covariance(covariance);
-            applied.start(floor.isSet() ? floor.base() : information.joint(), covariance);
-            usesApplied = true;
-        }
     }
 
     /**
@@ -204,7 +170,7 @@ public final class Estimator {
         System.arraycopy(v, 0, gain, 0, p);
         joint.divideInPlace(gain);
         joint.solveInPlace(gain);
-        quadratic = usesApplied ? applied.quadratic(phi) : information.quadratic(v, gain, work);
+        quadratic = covariance.quadratic(phi, v, gain, work);
     }
 
     /** Takes the row last predicted into the estimate. */
@@ -215,37 +181,20 @@ public final class Estimator {
         if (determined) {
             learnNoise();
         }
-        double effective = weight * information.weight(relation);
-        if (usesApplied) {
-            double after = effective / (1 + effective * quadraticOf(gain));
-            for (int i = 0; i < p; i++) {
-                gain[i] *= after;
-            }
-            applied.apply(phi, gain, effective);
-        }
+        covariance.use(phi, gain, weight * information.weight(relation));
         double squared = information.add(relation, phi, response, weight);
         if (!determined && squared >= 0) {
-            noise[relation].add(squared); // readings that repeat an operating point tell the noise before they tell θ
+            // Readings that repeat an operating point tell the noise before they tell θ.
+            noise.add(relation, squared);
         }
         usedWeights += 1;
         usedSquares += 1;
         rows++;
-        if (noise.length > 1) {
-            weigh();
-        }
-        if (usesApplied && directional() && Long.bitCount(rows) == 1) {
-            rewhiten();
+        noise.weigh(information);
+        if (directional() && Long.bitCount(rows) == 1) {
+            covariance.rewhiten();
         }
         refresh();
-    }
-
-    /** φᵀPφ from Pφ. */
-    private double quadraticOf(double[] pPhi) {
-        double sum = 0;
-        for (int i = 0; i < p; i++) {
-            sum += phi[i] * pPhi[i];
-        }
-        return sum;
     }
 
     private void ageForRow() {
@@ -263,7 +212,7 @@ public final class Estimator {
             ageCounts(factor);
             // A direction of which less is known than one reading tells has nothing to forget.
             if (leverage <= 1) {
-                applyCovariance();
+                covariance.follow(floor.isSet() ? floor.base() : information.joint());
                 information.ageAlong(phi, factor);
             }
         }
@@ -276,68 +225,28 @@ public final class Estimator {
 
     private void learnNoise() {
         double squared = innovation * innovation / (1 / weight + quadratic * information.weight(relation));
-        noise[relation].add(squared);
-        if ((rows & 3) == 0) {
-            refreshInverseRoot(refreshed);
-            refreshed = refreshed + 1 == p ? 0 : refreshed + 1;
-        }
+        noise.add(relation, squared);
+        score.follow(information.joint(), rows);
         double effective = weight * information.weight(relation);
-        score.add(
-                gain,
-                inverseRoots,
-                effective * innovation / (1 + leverage) * Math.sqrt(usedWeights),
-                forgettingFactor());
-    }
-
-    /** 1/√Pⱼⱼ by one substitution: of one unknown every fourth reading is often enough for what it serves. */
-    private void refreshInverseRoot(int j) {
-        InformationFactor joint = information.joint();
-        Arrays.fill(work, 0);
-        work[j] = 1;
-        joint.eliminate(work, 0, work);
-        inverseRoots[j] = 1 / Math.sqrt(joint.leverage(work));
+        score.add(gain, effective * innovation / (1 + leverage) * Math.sqrt(usedWeights), forgettingFactor());
     }
 
     private double forgettingFactor() {
         return forgetting.memory().factor(elapsed, true);
     }
 
-    /** Relations are weighted against the first by 1/s², once both are known well enough not to do harm. */
-    private void weigh() {
-        for (int k = 1; k < noise.length; k++) {
-            double ratio = noise[0].variance() / noise[k].variance();
-            boolean known = noise[0].degreesOfFreedom() >= ENOUGH && noise[k].degreesOfFreedom() >= ENOUGH;
-            information.weigh(k, known && ratio > 0 && ratio < Double.POSITIVE_INFINITY ? ratio : 1);
-        }
-        information.join();
-    }
-
     private void refresh() {
         InformationFactor joint = information.joint();
         if (!determined) {
-            if (!isDetermined(joint)) {
+            if (rows < p || !joint.isDetermined()) {
                 return;
             }
             determined = true;
             sinceDetermined = 0;
-            for (int j = 0; j < p; j++) {
-                refreshInverseRoot(j);
-            }
+            score.determined(joint);
         }
         sinceDetermined += memoryShare();
         joint.solve(theta);
-    }
-
-    private boolean isDetermined(InformationFactor joint) {
-        if (rows < p) {
-            return false;
-        }
-        for (int j = 0; j < p; j++) {
-            if (!(joint.d(j) > NOT_DETERMINED * joint.normSquared(j))) {
-                return false;
-            }
-        }
-        return true;
     }
 
     /** The part of one effective memory that a reading takes. */
@@ -360,7 +269,7 @@ public final class Estimator {
 
     /** Standard deviation of the innovation, in the response's unit; NaN while the noise is not known. */
     public double predictionSd() {
-        double noiseVariance = noise[relation].variance() * (1 / weight + quadratic * information.weight(relation));
+        double noiseVariance = noise.variance(relation) * (1 / weight + quadratic * information.weight(relation));
         return Math.sqrt(noiseVariance + ROUNDING * magnitude * ROUNDING * magnitude);
     }
 
@@ -381,12 +290,10 @@ public final class Estimator {
 
     /** C in units of s² of the first relation, p×p; NaN while not determined. */
     private void unscaled(double[] into) {
-        if (!determined) {
-            Arrays.fill(into, Double.NaN);
-        } else if (usesApplied) {
-            applied.covariance(into);
+        if (determined) {
+            covariance.covariance(into);
         } else {
-            information.covariance(into);
+            Arrays.fill(into, Double.NaN);
         }
     }
 
@@ -402,7 +309,7 @@ public final class Estimator {
     /** Covariance of the estimates from the readings alone, p×p in products of their units, widened as the uncertainties are. */
     public void covariance(double[] into) {
         unscaled(into);
-        double variance = noise[0].variance();
+        double variance = noise.variance(0);
         for (int i = 0; i < p; i++) {
             for (int j = 0; j < p; j++) {
                 into[i * p + j] *= variance * score.widening(i) * score.widening(j);
@@ -421,20 +328,16 @@ public final class Estimator {
 
     /** s of a reading of weight 1, in the response's unit; NaN while not known. */
     public double residualSd(int k) {
-        return Math.sqrt(noise[k].variance());
+        return Math.sqrt(noise.variance(k));
     }
 
     public double degreesOfFreedom(int k) {
-        return noise[k].degreesOfFreedom();
+        return noise.degreesOfFreedom(k);
     }
 
     /** Of the uncertainties: all relations together. */
     public double degreesOfFreedom() {
-        double sum = 0;
-        for (Noise each : noise) {
-            sum += each.degreesOfFreedom();
-        }
-        return sum;
+        return noise.degreesOfFreedom();
     }
 
     /** Lag-1 autocorrelation of an unknown's score; NaN while not known. */

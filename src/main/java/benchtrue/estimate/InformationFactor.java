@@ -8,6 +8,9 @@ import java.util.Arrays;
  * It starts with D = 0, so no prior biases the result. No method allocates.
  */
 final class InformationFactor {
+    /** dⱼ/‖column j‖² below this: unknown j is not determined; the square of one over the largest condition, 1e12. */
+    private static final double NOT_DETERMINED = 1e-24;
+
     private final int p;
     private final int stride;
     /** Row i holds R̄ᵢⱼ at i·stride + j for j &gt; i, and zᵢ at i·stride + p. */
@@ -232,6 +235,16 @@ final class InformationFactor {
             d[i] *= t / before;
             t = before;
         }
+    }
+
+    /** Whether every unknown has a value: no dⱼ is rounding beside its column. */
+    boolean isDetermined() {
+        for (int j = 0; j < p; j++) {
+            if (!(d[j] > NOT_DETERMINED * normSquared(j))) {
+                return false;
+            }
+        }
+        return true;
     }
 
     /** Diagonal entry: what is known of unknown i when those before it are left free, in units of the weights. */

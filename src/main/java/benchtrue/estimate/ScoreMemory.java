@@ -17,6 +17,11 @@ final class ScoreMemory {
     private final double[] last;
     private final double[] squares;
     private final double[] products;
+    /** 1/√Pⱼⱼ, at most 4p readings old. */
+    private final double[] inverseRoots;
+
+    private final double[] work;
+    private int refreshed;
     private double count;
     private double squaredCount;
 
@@ -24,6 +29,8 @@ final class ScoreMemory {
         last = new double[unknowns];
         squares = new double[unknowns];
         products = new double[unknowns];
+        inverseRoots = new double[unknowns];
+        work = new double[unknowns];
     }
 
     void clear() {
@@ -34,13 +41,34 @@ final class ScoreMemory {
         squaredCount = 0;
     }
 
+    /** All unknowns are determined from this reading on. */
+    void determined(InformationFactor joint) {
+        for (int j = 0; j < work.length; j++) {
+            refresh(joint, j);
+        }
+    }
+
+    /** Keeps up with P: one unknown every fourth reading is often enough for what it serves. */
+    void follow(InformationFactor joint, long rows) {
+        if ((rows & 3) == 0) {
+            refresh(joint, refreshed);
+            refreshed = refreshed + 1 == work.length ? 0 : refreshed + 1;
+        }
+    }
+
+    private void refresh(InformationFactor joint, int j) {
+        Arrays.fill(work, 0);
+        work[j] = 1;
+        joint.eliminate(work, 0, work);
+        inverseRoots[j] = 1 / Math.sqrt(joint.leverage(work));
+    }
+
     /**
      * @param gain Pφ, one for each unknown
-     * @param inverseRoots 1/√Pⱼⱼ of each
      * @param scale what else the score is made of
      * @param factor of the estimator's forgetting at this reading
      */
-    void add(double[] gain, double[] inverseRoots, double scale, double factor) {
+    void add(double[] gain, double scale, double factor) {
         double kept = Math.max(factor, LONGEST_FORGETTING);
         count = kept * count + 1;
         squaredCount = kept * kept * squaredCount + 1;
