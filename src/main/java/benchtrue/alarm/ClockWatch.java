@@ -86,6 +86,17 @@ final class ClockWatch {
                 -step);
     }
 
+    /** The source saw the device begin anew with the reading last arrived, though its time goes on. */
+    void restarted(long number) {
+        tell(
+                Alarm.Kind.RESTART,
+                running,
+                number,
+                Double.NaN,
+                "the device began anew; a new segment begins, to be compared with the one before",
+                0);
+    }
+
     private static String word(double ratio) {
         return String.format(Locale.ROOT, "%.0f", ratio);
     }

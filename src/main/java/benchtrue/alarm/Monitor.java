@@ -45,6 +45,11 @@ public final class Monitor {
         channels.arrive(reading, clock.running(), budget.perReading());
     }
 
+    /** The source saw the device begin anew with this reading; to be called after {@link #arrive}. */
+    public void restarted(Reading reading) {
+        clock.restarted(reading.number);
+    }
+
     /** Seconds by which the estimates age at this reading: never negative, 0 where the clock went back. */
     public double elapsed() {
         return clock.elapsed();

@@ -8,6 +8,8 @@ import org.jspecify.annotations.Nullable;
 public final class RelationMonitor {
     /** Degrees of freedom below which a few values that repeat by their resolution make the noise look like none. */
     private static final double KNOWN = 10;
+    /** Looks in a row at estimates that are not plausible before it is said: a hum can mislead the first of them. */
+    private static final int PATIENCE = 8;
     /** An intermittent connection is over after so many readings without an outlier. */
     private static final int GOOD_AGAIN = 5 * OutlierGate.WINDOW;
 
@@ -28,6 +30,7 @@ public final class RelationMonitor {
     private double firstOut;
     private long lastOut = Long.MIN_VALUE / 2;
     private boolean objected;
+    private int implausible;
     private String untested = "no reading yet";
 
     RelationMonitor(Watched watched, Budget budget, AlarmBook book, Channels channels, ClockWatch clock) {
@@ -211,10 +214,11 @@ public final class RelationMonitor {
             UnitSuspicion.Suspicion suspicion = UnitSuspicion.of(estimate, u, unknown.plausible());
             sign = suspicion.sign();
             unit = !sign && !suspicion.none();
-            if (sign || unit) {
+            if ((sign || unit) && ++implausible >= PATIENCE) {
                 tellPlausible(sign ? Alarm.Kind.SIGN : Alarm.Kind.UNIT, i, estimate, suspicion);
             }
         }
+        implausible = sign || unit ? implausible : 0;
         settle(Alarm.Kind.UNIT, unit);
         settle(Alarm.Kind.SIGN, sign);
     }

@@ -81,6 +81,9 @@ public final class Engine {
         log.at(reading, time);
         monitor.arrive(next);
         String reason = restart == null ? monitor.newSegment() : restart;
+        if (restart != null) {
+            monitor.restarted(next);
+        }
         if (reason != null) {
             beginSegment(reason);
         }
