@@ -80,6 +80,15 @@ final class AppliedCovariance {
         }
     }
 
+    /** φᵀPᵦφ of the row last looked at, Pᵦ of the base: how much more it tells than the base knows. */
+    double beyondBase() {
+        double sum = 0;
+        for (int i = 0; i < p; i++) {
+            sum += psi[i] * psi[i];
+        }
+        return sum;
+    }
+
     /** φᵀCφ. */
     double quadratic(double[] phi) {
         return project(phi);

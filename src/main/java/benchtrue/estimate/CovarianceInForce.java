@@ -5,10 +5,14 @@ package benchtrue.estimate;
  * them untrue, that of the gains really applied from then on.
  */
 final class CovarianceInForce {
+    /** A row that tells so many times what the whitening knows makes it useless: rounding would grow by this factor a row. */
+    private static final double OUTGROWN = 100;
+
     private final int p;
     private final Information information;
     private final AppliedCovariance applied;
     private boolean usesApplied;
+    private boolean outgrown;
 
     CovarianceInForce(int unknowns, Information information) {
         p = unknowns;
@@ -18,6 +22,7 @@ final class CovarianceInForce {
 
     void clear() {
         usesApplied = false;
+        outgrown = false;
     }
 
     /** Whether it follows the gains that are really applied. */
@@ -67,6 +72,15 @@ final class CovarianceInForce {
             pPhi[i] *= after;
         }
         applied.apply(phi, pPhi, w);
+        outgrown = w * applied.beyondBase() > OUTGROWN;
+    }
+
+    /** The row that was used has been added to the information. */
+    void settle() {
+        if (outgrown) {
+            outgrown = false;
+            rewhiten();
+        }
     }
 
     /** C, p×p. */

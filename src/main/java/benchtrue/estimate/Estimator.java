@@ -191,6 +191,7 @@ public final class Estimator {
         usedSquares += 1;
         rows++;
         noise.weigh(information);
+        covariance.settle();
         if (directional() && Long.bitCount(rows) == 1) {
             covariance.rewhiten();
         }
