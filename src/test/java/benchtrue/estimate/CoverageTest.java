@@ -4,6 +4,8 @@ import static org.assertj.core.api.Assertions.assertThat;
 
 import benchtrue.model.Forgetting;
 import benchtrue.model.Memory;
+import java.util.HashMap;
+import java.util.Map;
 import java.util.SplittableRandom;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -15,6 +17,9 @@ import org.junit.jupiter.params.provider.CsvSource;
 final class CoverageTest {
     private static final int RUNS = 800;
     private static final int READINGS = 600;
+    /** Limits by degrees of freedom: of a given memory there are few different ones. */
+    private static final Map<Double, Double> LIMITS = new HashMap<>();
+
     private static final double[] TRUTH = {11.3, -0.021, 0.05};
 
     private static Forgetting forgetting(double factor, boolean directional) {
@@ -77,5 +82,33 @@ final class CoverageTest {
             estimator.use();
         }
         return estimator;
+    }
+
+    /**
+     * The innovation test at its 1e-3 limit: of 320 000 tested readings some 320 are beyond it while nothing is wrong. With a
+     * memory of 20 readings a few more are missing than with a long one (ν is small there).
+     */
+    @ParameterizedTest
+    @CsvSource({"1,0.8,1.2", "0.99,0.8,1.2", "0.95,0.8,1.2"})
+    void theSampleTestAlarmsAsOftenAsItsLevelSays(double factor, double least, double most) {
+        SplittableRandom random = new SplittableRandom(1000);
+        long beyond = 0;
+        long tested = 0;
+        for (int run = 0; run < 400; run++) {
+            Estimator estimator = new Estimator(new boolean[] {false, true}, 1, forgetting(factor, false));
+            for (int i = 0; i < 900; i++) {
+                double[] phi = {random.nextDouble(-1, 1), 1};
+                estimator.next(1);
+                estimator.predict(0, phi, 3 * phi[0] - 1 + random.nextGaussian(), 1);
+                if (i >= 100) {
+                    tested++;
+                    double limit =
+                            LIMITS.computeIfAbsent(estimator.degreesOfFreedom(0), nu -> Quantiles.student(0.0005, nu));
+                    beyond += Math.abs(estimator.standardized()) > limit ? 1 : 0;
+                }
+                estimator.use();
+            }
+        }
+        assertThat(beyond / (1e-3 * tested)).isBetween(least, most);
     }
 }
