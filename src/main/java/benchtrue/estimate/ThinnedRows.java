@@ -7,8 +7,10 @@ import java.util.Arrays;
  * are kept depends on nothing but their number. Rows are stored multiplied by √w, so that all have the same variance.
  */
 public final class ThinnedRows {
-    /** Enough for a robust fit to a third of a percent of a standard deviation, in tens of megabytes at most. */
+    /** Enough for a robust fit to a third of a percent of a standard deviation. */
     private static final int MOST = 100_000;
+    /** With more unknowns fewer rows are kept, so that a fit takes no longer. */
+    private static final int UNKNOWNS_OF_MOST = 8;
 
     private final int p;
     private final int most;
@@ -19,7 +21,7 @@ public final class ThinnedRows {
     private long stride = 1;
 
     public ThinnedRows(int unknowns) {
-        this(unknowns, MOST);
+        this(unknowns, (int) (MOST * Math.min(1, Math.pow(UNKNOWNS_OF_MOST / (double) unknowns, 2))));
     }
 
     ThinnedRows(int unknowns, int most) {

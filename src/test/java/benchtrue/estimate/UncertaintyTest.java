@@ -47,6 +47,11 @@ final class UncertaintyTest {
     void writesVerySmallAndVeryLargeOnesWithOneExponent() {
         assertThat(Rounded.of(1.2041e-9, 1.1e-11).text()).isEqualTo("(1.204 ± 0.011)e-9");
         assertThat(Rounded.of(3.14159e12, 2.0e9).text()).isEqualTo("(3.1416 ± 0.0020)e12");
+        assertThat(Rounded.of(5e-12, 3.3e-13).text()).isEqualTo("(5.00 ± 0.33)e-12");
+        assertThat(Rounded.of(-0.001, 50).text()).isEqualTo("0 ± 50");
+        assertThat(Rounded.of(9.9996, 0.0099).text()).isEqualTo("9.9996 ± 0.0099");
+        assertThat(Rounded.of(5, 0).text()).isEqualTo("5 ± 0");
+        assertThat(Rounded.of(5, Double.POSITIVE_INFINITY).text()).isEqualTo("5 ± -");
         assertThat(Rounded.of(Double.NaN, 1).text()).isEqualTo("- ± -");
         assertThat(Rounded.of(5, Double.NaN).text()).isEqualTo("5 ± -");
         assertThat(Rounded.of(0, 0.002).text()).isEqualTo("0.0000 ± 0.0020");
