@@ -96,4 +96,9 @@ final class ChannelNoise {
     int longestRun() {
         return longestRun;
     }
+
+    /** Whether the indication is coarser than its noise, though it moves: then averaging helps little. */
+    boolean coarse() {
+        return windows == WINDOWS && noise < TELLING * step() && smallestStep < Double.POSITIVE_INFINITY;
+    }
 }

@@ -234,6 +234,17 @@ final class ChannelWatch {
         return (status == Status.GOOD && (candidate != Status.GOOD || unresolved())) ? "doubtful" : status.word();
     }
 
+    /** A warning that its resolution hides its noise, or null; a channel that somebody sets may stand still. */
+    @Nullable
+    String coarse() {
+        return channel.adjustable() || !noise.coarse()
+                ? null
+                : channel.name() + ": its noise is below 0.3 of its step of " + Words.number(noise.step())
+                        + Words.unit(channel.unit().symbol())
+                        + ", so averaging helps little; declare u_other of at least "
+                        + Words.number(noise.step() / Math.sqrt(12));
+    }
+
     ChannelNoise noise() {
         return noise;
     }

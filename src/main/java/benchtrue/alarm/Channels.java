@@ -5,6 +5,8 @@ import benchtrue.sheet.Channel;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
+import java.util.stream.Stream;
 import org.jspecify.annotations.Nullable;
 
 /** The channels of a run. */
@@ -52,6 +54,13 @@ final class Channels {
             }
         }
         return false;
+    }
+
+    List<String> notices() {
+        return Stream.of(watches)
+                .map(ChannelWatch::coarse)
+                .filter(Objects::nonNull)
+                .toList();
     }
 
     /** Status of a channel: good, doubtful, stuck, saturated, outside, silent. */

@@ -74,6 +74,11 @@ public final class Monitor {
         return channels.word(channel);
     }
 
+    /** What somebody should know of the channels that is no alarm: a resolution that hides the noise. */
+    public List<String> notices() {
+        return channels.notices();
+    }
+
     /** Silences of more than three median intervals. */
     public long gaps() {
         return clock.gaps();

@@ -126,7 +126,7 @@ final class Views {
     }
 
     private List<String> notices() {
-        List<String> notices = new ArrayList<>();
+        List<String> notices = new ArrayList<>(engine.monitor().notices());
         if (engine.acts().onHold()) {
             notices.add("estimates are held by the operator");
         }

@@ -56,6 +56,18 @@ class ChannelWatchTest {
     }
 
     @Test
+    void aResolutionThatHidesTheNoiseIsWarnedOf() {
+        ChannelWatch coarse = plain();
+        for (int i = 0; i < 40; i++) {
+            read(coarse, 10, 500 + i, 0.1);
+        }
+        assertThat(coarse.coarse()).contains("averaging helps little", "0.28868");
+        ChannelWatch fine = plain();
+        read(fine, 400, 500, 1);
+        assertThat(fine.coarse()).isNull();
+    }
+
+    @Test
     void aValueOutsideTheMeasuringIntervalIsToldAfterThreeReadings() {
         ChannelWatch watch = plain();
         read(watch, 300, 500, 1);
