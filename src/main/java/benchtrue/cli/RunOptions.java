@@ -15,13 +15,13 @@ final class RunOptions {
     @SuppressWarnings("NullAway.Init")
     private CommandSpec spec;
 
-    @Option(names = "--plain", description = "Lines instead of panes; so it is anyhow where there is no terminal.")
+    @Option(names = "--plain", description = "Plain lines: the only view of this version, so it changes nothing yet.")
     private boolean plain;
 
     @Option(
             names = "--pace",
             paramLabel = "N|max",
-            description = "Times real time, or max. Default: 20 in panes, max in plain lines.")
+            description = "Times real time, or max. Default: max.")
     private @Nullable String pace;
 
     @Option(
