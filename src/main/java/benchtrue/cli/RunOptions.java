@@ -18,10 +18,7 @@ final class RunOptions {
     @Option(names = "--plain", description = "Plain lines: the only view of this version, so it changes nothing yet.")
     private boolean plain;
 
-    @Option(
-            names = "--pace",
-            paramLabel = "N|max",
-            description = "Times real time, or max. Default: max.")
+    @Option(names = "--pace", paramLabel = "N|max", description = "Times real time, or max. Default: max.")
     private @Nullable String pace;
 
     @Option(
