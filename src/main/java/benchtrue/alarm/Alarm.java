@@ -15,6 +15,7 @@ import org.jspecify.annotations.Nullable;
  * @param size of the change in {@code unit}, with expanded uncertainty {@code sizeU}
  * @param cause name of an unknown, "offset", "not separable", or null
  * @param provisional whether the cause is only a lead so far
+ * @param acknowledged whether somebody has looked at it; one that returned to normal may still wait for that
  * @param count how often the same cause has spoken
  * @param text in plain words with its numbers
  */
@@ -36,6 +37,7 @@ public record Alarm(
         @Nullable String cause,
         boolean provisional,
         State state,
+        boolean acknowledged,
         int count,
         Priority priority,
         String text,

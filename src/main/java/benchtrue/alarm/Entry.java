@@ -128,6 +128,7 @@ final class Entry {
                 f.cause(),
                 f.provisional(),
                 state(),
+                acknowledged,
                 count,
                 f.priority(),
                 f.text(),

@@ -96,6 +96,7 @@ public final class Closings {
                 "not separable",
                 true,
                 Alarm.State.RAISED,
+                false,
                 1,
                 Alarm.Priority.ACT_NOW,
                 "Change the pressure at constant speed.",
