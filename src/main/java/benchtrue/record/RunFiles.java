@@ -4,6 +4,7 @@ import benchtrue.run.Closing;
 import benchtrue.run.EstimateRow;
 import benchtrue.run.Event;
 import benchtrue.run.RunListener;
+import benchtrue.run.TimedAct;
 import benchtrue.sheet.BenchSheet;
 import benchtrue.source.Failure;
 import java.io.Closeable;
@@ -15,16 +16,20 @@ import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
 import java.util.function.Consumer;
+import org.jspecify.annotations.Nullable;
 
 /**
- * The files that the program adds to a run folder: estimates and events as they come, the summary in two forms at the end.
+ * The files that the program adds to a run folder: estimates, events and acts as they come, the summary in two forms at the end.
  * What cannot be written is told once for each file and never stops the run.
  */
 public final class RunFiles implements RunListener, Closeable {
     private final Path folder;
+    private final BenchSheet sheet;
+    private final long every;
     private final Consumer<String> trouble;
-    private final EstimatesFile estimates;
-    private final EventsFile events;
+    private EstimatesFile estimates;
+    private EventsFile events;
+    private @Nullable ActsFile acts;
 
     /**
      * Begins the files afresh.
@@ -34,20 +39,33 @@ public final class RunFiles implements RunListener, Closeable {
      */
     public RunFiles(Path folder, BenchSheet sheet, long every, Consumer<String> trouble) {
         this.folder = folder;
+        this.sheet = sheet;
+        this.every = every;
         this.trouble = trouble;
         estimates = new EstimatesFile(folder, sheet, every, trouble);
         events = new EventsFile(folder, trouble);
+        forgetActs();
+    }
+
+    /** Those of an earlier run into the same folder. */
+    private void forgetActs() {
+        try {
+            Files.deleteIfExists(folder.resolve(ActsFile.NAME));
+        } catch (IOException e) {
+            trouble.accept(folder.resolve(ActsFile.NAME) + ": cannot be removed (" + Failure.words(e) + ")");
+        }
     }
 
     /** All files that are written into a run folder. */
     public static List<String> names() {
-        return List.of(EstimatesFile.NAME, EventsFile.NAME, SummaryJson.NAME, SummaryText.NAME);
+        return List.of(EstimatesFile.NAME, EventsFile.NAME, ActsFile.NAME, SummaryJson.NAME, SummaryText.NAME);
     }
 
     /** Whether an existing file begins as the ones written here do. */
     public static boolean wrote(Path file) throws IOException {
         String start = switch (String.valueOf(file.getFileName())) {
             case EstimatesFile.NAME -> "reading,time";
+            case ActsFile.NAME -> "reading,time,act,";
             case EventsFile.NAME -> "reading,time,event,";
             case SummaryJson.NAME -> "{\n  \"program\": {\n    \"name\": \"" + Program.NAME + "\"";
             default -> SummaryText.FIRST_WORDS;
@@ -67,6 +85,26 @@ public final class RunFiles implements RunListener, Closeable {
     @Override
     public void event(Event event) {
         events.event(event);
+    }
+
+    /** The file of acts begins with the first of them. */
+    @Override
+    public void act(TimedAct act) {
+        if (acts == null) {
+            acts = new ActsFile(folder, trouble);
+        }
+        acts.act(act);
+    }
+
+    /** All that was written is void: the files begin afresh. */
+    @Override
+    public void restarted() {
+        close();
+        estimates = new EstimatesFile(folder, sheet, every, trouble);
+        events = new EventsFile(folder, trouble);
+        if (acts != null) {
+            acts = new ActsFile(folder, trouble);
+        }
     }
 
     @Override
@@ -89,5 +127,8 @@ public final class RunFiles implements RunListener, Closeable {
     public void close() {
         estimates.close();
         events.close();
+        if (acts != null) {
+            acts.close();
+        }
     }
 }

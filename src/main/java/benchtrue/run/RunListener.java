@@ -12,7 +12,7 @@ public interface RunListener {
 
     void event(Event event);
 
-    /** The operator did something; not told of acts that come from a recorded run. */
+    /** The operator did something, now or when the run was recorded. */
     default void act(TimedAct act) {}
 
     /** The run goes back to its first reading: all that was told is void. */

@@ -81,7 +81,7 @@ final class Session implements AutoCloseable {
     /** The acts that were recorded before this reading. */
     private void applyUntil(long number) {
         while (nextAct < acts.size() && acts.get(nextAct).reading() < number) {
-            engine.apply(acts.get(nextAct++).act());
+            act(acts.get(nextAct++).act());
         }
     }
 

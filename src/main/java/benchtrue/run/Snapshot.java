@@ -14,6 +14,7 @@ import org.jspecify.annotations.Nullable;
  * @param progress how much of a replay is read, 0…1; NaN where that is not known (live)
  * @param pace times real time; infinite: as fast as it goes
  * @param readingAge seconds of the wall clock since the last reading came (live only)
+ * @param held whether the operator holds the estimates
  * @param advice what to vary next; null: nothing is left to wish for
  * @param next why the run should go on, a phrase for each reason; empty: it has enough
  * @param notices one line each, what the operator should know now: held, waiting for the reference, …
@@ -30,6 +31,7 @@ public record Snapshot(
         double progress,
         double pace,
         double readingAge,
+        boolean held,
         Counts counts,
         List<ChannelView> channels,
         List<RelationView> relations,

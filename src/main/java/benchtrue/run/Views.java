@@ -81,6 +81,7 @@ final class Views {
                 source.progress(),
                 pace,
                 readingAge,
+                engine.acts().onHold(),
                 counts(),
                 channels(sheet, monitor),
                 relations,
