@@ -27,7 +27,7 @@ public final class Main {
     static int run(String[] args, Output output, Map<String, String> environment) {
         CommandLine commands = new CommandLine(new RootCommand(output))
                 .addSubcommand(new CheckCommand(output))
-                .addSubcommand(new ReplayCommand(output))
+                .addSubcommand(new ReplayCommand(output, environment))
                 .addSubcommand(new RehearseCommand(output));
         commands.setUsageHelpAutoWidth(false);
         commands.setParameterExceptionHandler((wrong, arguments) -> {

@@ -1,44 +1,40 @@
 package benchtrue.cli;
 
+import benchtrue.screen.Ascii;
 import java.io.PrintStream;
 import java.nio.charset.StandardCharsets;
-import java.util.Map;
+import java.util.function.Consumer;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Standard output and standard error. Once whoever reads the output has gone ({@code | head}), nothing more is written and
  * nothing is said about it. Control characters of texts from outside never reach a terminal.
  */
 final class Output {
-    private static final Map<Integer, String> ASCII = Map.ofEntries(
-            Map.entry((int) '±', "+/-"),
-            Map.entry((int) '−', "-"),
-            Map.entry((int) '–', "-"),
-            Map.entry((int) '×', "x"),
-            Map.entry((int) '·', "*"),
-            Map.entry((int) '…', "..."),
-            Map.entry((int) 'ν', "nu"),
-            Map.entry((int) 'λ', "lambda"),
-            Map.entry((int) 'σ', "sigma"),
-            Map.entry((int) 'µ', "u"),
-            Map.entry((int) 'μ', "u"),
-            Map.entry((int) 'Ω', "ohm"),
-            Map.entry((int) '°', "deg"),
-            Map.entry((int) '²', "^2"),
-            Map.entry((int) '³', "^3"));
-
     private final PrintStream out;
     private final PrintStream err;
     private final boolean ascii;
+    private final @Nullable Consumer<String> errors;
 
     /** @param ascii whether everything outside ASCII is transcribed */
     Output(PrintStream out, PrintStream err, boolean ascii) {
+        this(out, err, ascii, null);
+    }
+
+    private Output(PrintStream out, PrintStream err, boolean ascii, @Nullable Consumer<String> errors) {
         this.out = out;
         this.err = err;
         this.ascii = ascii;
+        this.errors = errors;
     }
 
     Output inAscii() {
-        return new Output(out, err, true);
+        return new Output(out, err, true, errors);
+    }
+
+    /** The same, but errors go elsewhere. */
+    Output withErrors(Consumer<String> elsewhere) {
+        return new Output(out, err, ascii, elsewhere);
     }
 
     boolean ascii() {
@@ -65,6 +61,10 @@ final class Output {
     }
 
     void error(String line) {
+        if (errors != null) {
+            errors.accept(line);
+            return;
+        }
         write(err, clean(line) + "\n");
     }
 
@@ -81,13 +81,7 @@ final class Output {
 
     private String clean(String text) {
         String safe = text.replaceAll("[\\p{Cntrl}\\x{80}-\\x{9f}]", "\uFFFD");
-        return ascii ? transcribed(safe) : safe;
-    }
-
-    private static String transcribed(String text) {
-        StringBuilder plain = new StringBuilder();
-        text.codePoints().forEach(c -> plain.append(c < 128 ? Character.toString(c) : ASCII.getOrDefault(c, "?")));
-        return plain.toString();
+        return ascii ? Ascii.of(safe) : safe;
     }
 
     private static String escaped(String json) {

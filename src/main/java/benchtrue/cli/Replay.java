@@ -6,6 +6,7 @@ import benchtrue.run.Closing;
 import benchtrue.run.Desk;
 import benchtrue.run.Options;
 import benchtrue.run.ReferenceRun;
+import benchtrue.run.RunListener;
 import benchtrue.run.Runner;
 import benchtrue.run.Setup;
 import benchtrue.run.SourceMaker;
@@ -19,6 +20,7 @@ import org.jspecify.annotations.Nullable;
 
 /** One replay: puts source, engine, files and what is shown together. */
 final class Replay {
+    private static final double PACE_IN_PANES = 20;
 
     private final RunFolder run;
     private final RunOptions options;
@@ -67,13 +69,23 @@ final class Replay {
     }
 
     /** @param told whether lines say what happens */
-    Closing inLines(boolean told) throws IOException, InterruptedException, Refusal {
-        Double pace = options.pace();
-        Options driven = new Options(pace == null ? Double.POSITIVE_INFINITY : pace, false, run.acts());
-        return with(told ? new PlainLines(output, run.sheet()) : null, driven, new Desk());
+    Closing inLines(boolean told, Desk desk) throws IOException, InterruptedException, Refusal {
+        RunListener lines = told ? new PlainLines(output, run.sheet()) : null;
+        return run(lines, driven(Double.POSITIVE_INFINITY, false), desk, output);
     }
 
-    private Closing with(@Nullable PlainLines lines, Options driven, Desk desk)
+    /** Ends when the operator closes it. */
+    Closing inPanes(Desk desk) throws Exception {
+        Options driven = driven(PACE_IN_PANES, true);
+        return new PaneRun(desk, run.sheet(), output).show(aside -> run(null, driven, desk, aside));
+    }
+
+    private Options driven(double pace, boolean shown) {
+        Double wanted = options.pace();
+        return new Options(wanted == null ? pace : wanted, shown, run.acts());
+    }
+
+    private Closing run(@Nullable RunListener lines, Options driven, Desk desk, Output errors)
             throws IOException, InterruptedException, Refusal {
         SourceMaker maker = run.maker();
         Path out = options.out();
@@ -81,7 +93,7 @@ final class Replay {
             return new Runner(setup, maker, maker, driven, new Listeners(lines, null), desk).run();
         }
         OutFolder.claim(out, options.yes());
-        try (RunFiles files = new RunFiles(out, run.sheet(), options.every(), output::error)) {
+        try (RunFiles files = new RunFiles(out, run.sheet(), options.every(), errors::error)) {
             return new Runner(setup, maker, maker, driven, new Listeners(lines, files), desk).run();
         }
     }

@@ -3,9 +3,11 @@ package benchtrue.cli;
 import benchtrue.record.SummaryJson;
 import benchtrue.record.SummaryText;
 import benchtrue.run.Closing;
+import benchtrue.run.Desk;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.concurrent.Callable;
 import org.jspecify.annotations.Nullable;
 import picocli.CommandLine.Command;
@@ -20,6 +22,7 @@ import picocli.CommandLine.Spec;
 @Command(name = "replay", description = "Replay run folders: one in panes, several at once in plain lines.")
 final class ReplayCommand implements Callable<Integer> {
     private final Output output;
+    private final Map<String, String> environment;
 
     @Spec
     @SuppressWarnings("NullAway.Init")
@@ -38,8 +41,9 @@ final class ReplayCommand implements Callable<Integer> {
     @SuppressWarnings("NullAway.Init")
     private List<Path> runs;
 
-    ReplayCommand(Output output) {
+    ReplayCommand(Output output, Map<String, String> environment) {
         this.output = output;
+        this.environment = environment;
     }
 
     @Override
@@ -69,14 +73,28 @@ final class ReplayCommand implements Callable<Integer> {
 
     private Integer one(Output out) throws Exception {
         Replay replay = new Replay(open(runs.get(0), out), options, out);
-        Closing closing = replay.inLines(!options.json());
+        Desk desk = new Desk();
+        Departure departure = Departure.of(desk);
+        try {
+            Closing closing = inPanes() ? replay.inPanes(desk) : replay.inLines(!options.json(), desk);
+            tell(closing, out);
+            return closing.status();
+        } finally {
+            departure.done();
+        }
+    }
+
+    private boolean inPanes() {
+        return !options.plain() && !options.json() && Surroundings.canDraw(environment);
+    }
+
+    private void tell(Closing closing, Output out) {
         if (options.json()) {
             out.json(SummaryJson.of(closing));
         } else {
             out.line("");
             out.text(SummaryText.brief(closing));
         }
-        return closing.status();
     }
 
     /** Each for itself: one that cannot be opened does not stop the others. */
@@ -86,7 +104,7 @@ final class ReplayCommand implements Callable<Integer> {
         boolean refused = false;
         for (Path run : runs) {
             try {
-                Closing closing = new Replay(open(run, out), options, out).inLines(false);
+                Closing closing = new Replay(open(run, out), options, out).inLines(false, new Desk());
                 closings.add(closing);
                 worst = Math.max(worst, closing.status());
                 if (!options.json()) {

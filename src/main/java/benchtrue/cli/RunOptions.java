@@ -15,10 +15,13 @@ final class RunOptions {
     @SuppressWarnings("NullAway.Init")
     private CommandSpec spec;
 
-    @Option(names = "--plain", description = "Plain lines: the only view of this version, so it changes nothing yet.")
+    @Option(names = "--plain", description = "Plain lines instead of panes; by itself where there is no terminal.")
     private boolean plain;
 
-    @Option(names = "--pace", paramLabel = "N|max", description = "Times real time, or max. Default: max.")
+    @Option(
+            names = "--pace",
+            paramLabel = "N|max",
+            description = "Times real time, or max. Default: 20 in panes, max in plain lines.")
     private @Nullable String pace;
 
     @Option(
