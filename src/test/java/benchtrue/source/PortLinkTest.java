@@ -101,10 +101,15 @@ class PortLinkTest {
                 .hasMessage("there is no such port");
         Path file = Files.writeString(folder.resolve("file"), "no port");
         assertThatThrownBy(() -> PortLink.open(file.toString(), LINE)).isInstanceOf(IOException.class);
-        try (TerminalPair pair = new TerminalPair(folder);
-                PortLink first = PortLink.open(pair.near(), LINE)) {
-            assertThat(first.read(buffer)).isZero();
-            assertThatThrownBy(() -> PortLink.open(pair.near(), LINE)).hasMessage("another program has it open");
+        try (TerminalPair pair = new TerminalPair(folder)) {
+            Process other =
+                    new ProcessBuilder("flock", "-F", pair.near(), "sh", "-c", "echo held; exec sleep 30").start();
+            try {
+                assertThat(other.getInputStream().read()).isEqualTo('h');
+                assertThatThrownBy(() -> PortLink.open(pair.near(), LINE)).hasMessage("another program has it open");
+            } finally {
+                other.destroy();
+            }
         }
     }
 
