@@ -31,6 +31,7 @@ public record BenchSheet(
         Alarms alarms,
         @Nullable DecisionRule rule,
         @Nullable LineSpec line,
+        @Nullable PollSpec poll,
         @Nullable Rehearsal rehearsal,
         String sha256) {
 
@@ -52,6 +53,7 @@ public record BenchSheet(
                 alarms,
                 rule,
                 line,
+                poll,
                 rehearsal,
                 sha256);
     }

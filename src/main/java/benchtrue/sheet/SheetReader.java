@@ -101,6 +101,7 @@ public final class SheetReader {
                 rest.alarms(),
                 rest.rule(),
                 LineReader.read(keys),
+                PollReader.read(keys, channels.channels()),
                 RehearsalReader.read(keys, channels, relations),
                 sha256);
         keys.done();

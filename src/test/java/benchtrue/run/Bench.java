@@ -55,6 +55,7 @@ final class Bench {
                 null,
                 null,
                 null,
+                null,
                 "");
     }
 

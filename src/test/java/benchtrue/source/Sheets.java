@@ -47,6 +47,7 @@ final class Sheets {
                 null,
                 line,
                 null,
+                null,
                 "");
     }
 
