@@ -3,9 +3,12 @@ package benchtrue.cli;
 import benchtrue.record.Program;
 import java.io.FileDescriptor;
 import java.io.FileOutputStream;
+import java.io.IOException;
 import java.io.PrintStream;
+import java.io.UncheckedIOException;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Objects;
 import picocli.CommandLine;
 
 /** Where the program begins: command line in, exit status out. */
@@ -39,6 +42,11 @@ public final class Main {
             if (exception instanceof Refusal refusal) {
                 refusal.messages().forEach(output::error);
                 return refusal.status().code();
+            }
+            if (exception instanceof UncheckedIOException gone) {
+                IOException why = Objects.requireNonNull(gone.getCause());
+                output.error(why.getMessage() + "; the run ends here, what was written stays");
+                return ExitStatus.SOURCE_LOST.code();
             }
             output.error(Faults.record(exception, Program.version(), environment));
             return ExitStatus.FAULT.code();

@@ -63,12 +63,11 @@ final class Texts {
         if (!Double.isFinite(seconds)) {
             return UNKNOWN;
         }
-        long whole = (long) Math.floor(seconds);
-        if (whole >= 3600) {
-            return String.format(Locale.ROOT, "%d:%02d:%02d", whole / 3600, whole / 60 % 60, whole % 60);
-        }
-        double tenths = Math.floor(seconds % 60 * 10) / 10;
-        return String.format(Locale.ROOT, "%d:%04.1f", whole / 60, tenths);
+        long tenths = Math.round(seconds * 10);
+        long whole = tenths / 10;
+        return whole >= 3600
+                ? String.format(Locale.ROOT, "%d:%02d:%02d", whole / 3600, whole / 60 % 60, whole % 60)
+                : String.format(Locale.ROOT, "%d:%02d.%d", whole / 60, whole % 60, tenths % 10);
     }
 
     /** Broken into lines of at most so many characters, at spaces where there are some. */

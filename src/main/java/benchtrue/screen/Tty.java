@@ -7,6 +7,7 @@ import java.io.FileDescriptor;
 import java.io.FileOutputStream;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
+import org.jspecify.annotations.Nullable;
 
 /**
  * The terminal that the program was started in. Its output is buffered, so that a frame is one write; its size is asked of the
@@ -16,13 +17,52 @@ final class Tty extends UnixTerminal {
     private static final int BUFFER = 1 << 16;
     private static final TerminalSize USUAL = new TerminalSize(80, 24);
 
+    /** Null only while the library's constructor runs. */
+    private final @Nullable Thread owner;
+
     Tty(boolean ascii) throws IOException {
         super(
                 System.in,
                 new BufferedOutputStream(new FileOutputStream(FileDescriptor.out), BUFFER),
                 ascii ? StandardCharsets.US_ASCII : StandardCharsets.UTF_8,
                 CtrlCBehaviour.TRAP);
+        owner = Thread.currentThread();
         getInputDecoder().setTimeoutUnits(1);
+    }
+
+    /** The library's shutdown hook would restore the terminal while its owner still draws. */
+    private boolean strange() {
+        return owner != null && Thread.currentThread() != owner;
+    }
+
+    @Override
+    public void exitPrivateMode() throws IOException {
+        if (!strange()) {
+            super.exitPrivateMode();
+        }
+    }
+
+    @Override
+    protected void restoreTerminalSettings() throws IOException {
+        if (!strange()) {
+            super.restoreTerminalSettings();
+        }
+    }
+
+    @Override
+    protected void keyStrokeSignalsEnabled(boolean enabled) throws IOException {
+        if (!strange()) {
+            super.keyStrokeSignalsEnabled(enabled);
+        }
+    }
+
+    @Override
+    public void close() throws IOException {
+        try {
+            super.close();
+        } catch (IllegalStateException e) {
+            // The program is being ended by a signal: the hook cannot be taken back, the terminal is restored by then.
+        }
     }
 
     /** Leaves Ctrl-Z, Ctrl-\ and Ctrl-Y to the program: a suspended program would leave its panes on the terminal. */
