@@ -8,7 +8,6 @@ import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.Map;
 import java.util.concurrent.CompletableFuture;
 import java.util.concurrent.TimeUnit;
 import org.junit.jupiter.api.Tag;
@@ -18,16 +17,12 @@ import org.junit.jupiter.api.io.TempDir;
 /** On pseudo-terminals, which have neither a speed nor a frame: what these do on a wire is not tested here. */
 @Tag("end-to-end")
 class PortLinkTest {
-    private static final LineSpec LINE = line("8N1");
+    private static final LineSpec LINE = Sheets.line("8N1");
 
     @TempDir
     Path folder;
 
     private final byte[] buffer = new byte[64];
-
-    private static LineSpec line(String frame) {
-        return new LineSpec(null, 9600, frame, ",", false, Map.of());
-    }
 
     private String text(int length) {
         return new String(buffer, 0, length, StandardCharsets.ISO_8859_1);
@@ -116,8 +111,8 @@ class PortLinkTest {
     @Test
     void aPseudoTerminalTakesAnyFrame() throws IOException {
         try (TerminalPair pair = new TerminalPair(folder);
-                PortLink near = PortLink.open(pair.near(), line("7E1"));
-                PortLink far = PortLink.open(pair.far(), line("7E1"))) {
+                PortLink near = PortLink.open(pair.near(), Sheets.line("7E1"));
+                PortLink far = PortLink.open(pair.far(), Sheets.line("7E1"))) {
             send(far, "1.5");
             assertThat(text(near.read(buffer))).isEqualTo("1.5");
         }

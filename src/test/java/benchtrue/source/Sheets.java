@@ -25,6 +25,11 @@ final class Sheets {
         return of(new LineSpec(null, 9600, "8N1", ";", true, Map.of()), namesAndUnits);
     }
 
+    /** 9600 baud. */
+    static LineSpec line(String frame) {
+        return new LineSpec(null, 9600, frame, ",", false, Map.of());
+    }
+
     private static BenchSheet of(@Nullable LineSpec line, String... namesAndUnits) {
         List<Channel> channels = new ArrayList<>();
         for (int i = 0; i < namesAndUnits.length; i += 2) {

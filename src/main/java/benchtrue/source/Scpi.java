@@ -1,0 +1,81 @@
+package benchtrue.source;
+
+import benchtrue.sheet.PollSpec;
+import java.nio.charset.StandardCharsets;
+import java.util.List;
+import java.util.Locale;
+import java.util.regex.Pattern;
+
+/**
+ * Asks the sheet's queries, one in a message (IEEE 488.2-1992 for numbers and messages, SCPI-1999 volume 1, 7.2.1 for the numbers that
+ * stand for overload and for none).
+ */
+final class Scpi implements Poller {
+    /** NR1, NR2 and NR3. */
+    private static final Pattern NUMBER = Pattern.compile("[+-]?(\\d+\\.?\\d*|\\.\\d+)(E[+-]?\\d+)?");
+
+    private static final double OVERLOAD = 9.9e37;
+    private static final double NOT_A_NUMBER = 9.91e37;
+    private static final int LONGEST_QUOTE = 40;
+
+    /** A value is some 16 characters long; what goes on and on is no answer. */
+    private static final int LONGEST_ANSWER = 1024;
+
+    private final List<String> queries;
+    private final String terminator;
+
+    Scpi(PollSpec.Scpi scpi) {
+        queries = scpi.queries();
+        terminator = scpi.terminator();
+    }
+
+    @Override
+    public byte[] request(int channel) {
+        return (queries.get(channel) + terminator).getBytes(StandardCharsets.US_ASCII);
+    }
+
+    @Override
+    public int instrument(int channel) {
+        return 0;
+    }
+
+    @Override
+    public long silenceNanos() {
+        return 0;
+    }
+
+    @Override
+    public Reply reply(int channel, byte[] bytes, int length) {
+        String text = new String(bytes, 0, length, StandardCharsets.ISO_8859_1);
+        int from = 0;
+        for (int end = text.indexOf(terminator); end >= 0; end = text.indexOf(terminator, from)) {
+            String line = text.substring(from, end).strip();
+            from = end + terminator.length();
+            // An end that was left over from the answer before, or an instrument that echoes.
+            if (!line.isEmpty() && !line.equals(queries.get(channel))) {
+                return answer(line);
+            }
+        }
+        return length < LONGEST_ANSWER ? new Unfinished() : new Garbled("bytes without end, no answer");
+    }
+
+    private static Reply answer(String line) {
+        String text = line.toUpperCase(Locale.ROOT);
+        if (!NUMBER.matcher(text).matches()) {
+            return new NoValue("it answers " + quoted(line) + ", which is not one number");
+        }
+        double number = Double.parseDouble(text);
+        if (number == NOT_A_NUMBER) {
+            return new NoValue("it answers 9.91E37: not a number");
+        }
+        if (Math.abs(number) == OVERLOAD) {
+            return new NoValue(number > 0 ? "it answers 9.9E37: overload" : "it answers -9.9E37: overload");
+        }
+        return Double.isInfinite(number) ? new NoValue("it answers a number beyond all bounds") : new Value(number);
+    }
+
+    private static String quoted(String line) {
+        String shown = line.length() <= LONGEST_QUOTE ? line : line.substring(0, LONGEST_QUOTE) + "…";
+        return "\"" + shown.replaceAll("[^ -~…]", "?") + "\"";
+    }
+}
