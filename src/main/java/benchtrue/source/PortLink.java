@@ -99,6 +99,14 @@ final class PortLink implements SerialLink, Closeable {
         }
     }
 
+    @Override
+    public void discard() {
+        int old = port.bytesAvailable();
+        if (old > 0) {
+            port.readBytes(new byte[old], old);
+        }
+    }
+
     /** Frees a {@link #read} that waits in another thread. */
     @Override
     public void close() {

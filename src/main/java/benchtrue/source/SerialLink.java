@@ -13,4 +13,7 @@ interface SerialLink {
 
     /** @throws IOException where not all could be written, which is so when the line is gone */
     void write(byte[] bytes, int length) throws IOException;
+
+    /** Throws away what has come and was not read. */
+    void discard();
 }

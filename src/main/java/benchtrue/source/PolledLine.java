@@ -1,0 +1,183 @@
+package benchtrue.source;
+
+import benchtrue.sheet.BenchSheet;
+import benchtrue.sheet.Channel;
+import benchtrue.sheet.PollSpec;
+import benchtrue.source.Poller.Garbled;
+import benchtrue.source.Poller.NoValue;
+import benchtrue.source.Poller.Reply;
+import benchtrue.source.Poller.Unfinished;
+import benchtrue.source.Poller.Value;
+import java.io.IOException;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+
+/**
+ * Asks the instruments on one line, a round of questions each period and one question at a time. An instrument without a
+ * sound answer is left alone for a while, at first as long as an answer may take: what it says late is thrown away, never taken for
+ * the answer to the next question. Used by one thread.
+ */
+final class PolledLine {
+    private static final long NANOS_PER_MILLI = 1_000_000;
+    private static final double NANOS = 1e9;
+    private static final int CHUNK = 512;
+    private static final int LONGEST = 2048;
+
+    private final Poller poller;
+    private final List<String> channels;
+    private final long periodNanos;
+    private final long timeoutNanos;
+    private final SerialLink link;
+    private final Ticker ticker;
+    private final Map<Integer, BackOff> backOffs = new HashMap<>();
+    private final byte[] chunk = new byte[CHUNK];
+    private final byte[] answer = new byte[LONGEST];
+    private final String patience;
+    private long lastByte;
+    private long due;
+
+    /** The first round is due at once. */
+    PolledLine(BenchSheet sheet, PollSpec spec, Poller poller, SerialLink link, Ticker ticker) {
+        this.poller = poller;
+        channels = sheet.channels().stream().map(Channel::name).toList();
+        periodNanos = (long) (spec.periodSeconds() * NANOS);
+        timeoutNanos = (long) (spec.timeoutSeconds() * NANOS);
+        this.link = link;
+        this.ticker = ticker;
+        patience = " within " + seconds(timeoutNanos);
+        due = ticker.nanos();
+        lastByte = due;
+        for (int channel = 0; channel < channels.size(); channel++) {
+            backOffs.put(poller.instrument(channel), new BackOff());
+        }
+    }
+
+    /**
+     * Waits until the next round is due, and asks it. A round that takes longer than the period is followed by the next at once; none
+     * is asked for while all instruments are left alone.
+     *
+     * @throws IOException where the line is gone: it is to be opened again, and asked over by another object
+     */
+    Polled next() throws IOException, InterruptedException {
+        idle(due);
+        idle(ticker.nanos() + leastLeft());
+        due = Math.max(due + periodNanos, ticker.nanos());
+        Round round = new Round(channels.size());
+        for (int channel = 0; channel < channels.size(); channel++) {
+            if (backOff(channel).left(ticker.nanos()) <= 0) {
+                ask(channel, round);
+            }
+        }
+        return round.done(ticker.nanos());
+    }
+
+    /** What a round has given so far. */
+    private static final class Round {
+        private final double[] values;
+        private final long[] stamps;
+        private final List<String> problems = new ArrayList<>();
+        private long first;
+        private boolean answered;
+
+        Round(int channels) {
+            values = new double[channels];
+            stamps = new long[channels];
+            Arrays.fill(values, Double.NaN);
+        }
+
+        void answered(int channel, double value, long stamp) {
+            values[channel] = value;
+            stamps[channel] = stamp;
+            first = answered ? first : stamp;
+            answered = true;
+        }
+
+        Polled done(long now) {
+            return new Polled(answered ? first : now, values, stamps, problems, answered);
+        }
+    }
+
+    private BackOff backOff(int channel) {
+        BackOff backOff = backOffs.get(poller.instrument(channel));
+        if (backOff == null) {
+            throw new IllegalStateException("channel " + channel + " has no instrument");
+        }
+        return backOff;
+    }
+
+    private long leastLeft() {
+        long now = ticker.nanos();
+        return backOffs.values().stream().mapToLong(b -> b.left(now)).min().orElse(0);
+    }
+
+    /** Waits with an ear on the line, so that a pulled cable is noticed; what comes meanwhile comes too late. */
+    private void idle(long until) throws IOException, InterruptedException {
+        while (until - ticker.nanos() > PortLink.WAIT_MILLIS * NANOS_PER_MILLI) {
+            read();
+        }
+        ticker.sleep(until - ticker.nanos());
+    }
+
+    private int read() throws IOException {
+        int count = link.read(chunk);
+        if (count < 0) {
+            throw new IOException("the port is gone");
+        }
+        if (count > 0) {
+            lastByte = ticker.nanos();
+        }
+        return count;
+    }
+
+    private void ask(int channel, Round round) throws IOException, InterruptedException {
+        ticker.sleep(lastByte + poller.silenceNanos() - ticker.nanos());
+        link.discard();
+        byte[] request = poller.request(channel);
+        link.write(request, request.length);
+        long asked = ticker.nanos();
+        long stamp = 0;
+        int length = 0;
+        Reply reply = new Unfinished();
+        while (reply instanceof Unfinished && ticker.nanos() - asked < timeoutNanos) {
+            int count = Math.min(read(), LONGEST - length);
+            if (count > 0) {
+                stamp = length == 0 ? lastByte : stamp;
+                System.arraycopy(chunk, 0, answer, length, count);
+                length += count;
+                reply = poller.reply(channel, answer, length);
+            }
+        }
+        settle(channel, reply, length, stamp, round);
+    }
+
+    private void settle(int channel, Reply reply, int length, long stamp, Round round) {
+        if (reply instanceof Value value) {
+            backOff(channel).answered();
+            round.answered(channel, value.value(), stamp);
+        } else if (reply instanceof NoValue none) {
+            backOff(channel).answered();
+            round.answered(channel, Double.NaN, stamp);
+            round.problems.add(channels.get(channel) + ": " + none.why());
+        } else if (reply instanceof Garbled garbled) {
+            failed(channel, garbled.why(), round);
+        } else if (length == 0) {
+            failed(channel, "no answer" + patience, round);
+        } else {
+            failed(channel, "no whole answer" + patience + " (" + length + " bytes came)", round);
+        }
+    }
+
+    private void failed(int channel, String why, Round round) {
+        long wait = backOff(channel).failed(timeoutNanos, ticker.nanos());
+        round.problems.add(channels.get(channel) + ": " + why + "; asked again in " + seconds(wait));
+    }
+
+    private static String seconds(long nanos) {
+        String text = String.format(Locale.ROOT, "%.2f", nanos / NANOS);
+        return text.replaceAll("\\.?0+$", "") + " s";
+    }
+}
