@@ -18,7 +18,7 @@ final class ChannelWatch {
     private final Channel channel;
     private final AlarmBook book;
     private final ChannelNoise noise;
-    private final MedianInterval ownInterval = new MedianInterval();
+    private final UsualInterval ownInterval = new UsualInterval();
     private Status status = Status.GOOD;
     private Status candidate = Status.GOOD;
     private int candidateFor;
@@ -94,7 +94,7 @@ final class ChannelWatch {
     }
 
     private void missing(double time, long number) {
-        double patience = SILENT * ownInterval.median();
+        double patience = SILENT * ownInterval.seconds();
         if (ownInterval.known() && time - lastTime > patience && status != Status.SILENT) {
             candidateTime = lastTime;
             candidateReading = number;

@@ -4,16 +4,19 @@ import java.util.Locale;
 import org.jspecify.annotations.Nullable;
 
 /**
- * The time stamps: silence of more than three median intervals is a gap, and nothing is interpolated over it; a stamp that
+ * The time stamps: silence of more than three usual intervals, and of more than 0.1 s, is a gap, and nothing is interpolated over it; a stamp that
  * goes back, or leaps by more than ten minutes and a thousand intervals, is a restart or a clock that was set, and begins a
  * new segment.
  */
 final class ClockWatch {
     private static final double GAP = 3;
+    /** A system that has other work may hand lines over so late: common practice, no source. In s. */
+    private static final double SHORTEST_GAP = 0.1;
+
     private static final double LEAP_INTERVALS = 1000;
     private static final double LEAP_SECONDS = 600;
 
-    private final MedianInterval intervals = new MedianInterval();
+    private final UsualInterval intervals = new UsualInterval();
     private final AlarmBook book;
     private double last = Double.NaN;
     private double running;
@@ -34,14 +37,12 @@ final class ClockWatch {
         if (intervals.known()) {
             judge(step, time, number);
         }
-        if (step < GAP * intervals.median() || !intervals.known()) {
-            intervals.add(step);
-        }
+        intervals.add(step);
         last = time;
     }
 
     private void judge(double step, double time, long number) {
-        double usual = intervals.median();
+        double usual = intervals.seconds();
         if (step < -GAP * usual) {
             elapsed = 0;
             restart(step, time, number);
@@ -62,7 +63,7 @@ final class ClockWatch {
                     step,
                     "time leaps forward by %.6g s: a long silence or a clock that was set; a new segment begins",
                     step);
-        } else if (step > GAP * usual) {
+        } else if (step > Math.max(GAP * usual, SHORTEST_GAP)) {
             gaps++;
             tell(
                     Alarm.Kind.GAP,
@@ -124,9 +125,9 @@ final class ClockWatch {
         return running;
     }
 
-    /** Median interval of readings in s; NaN before the second. */
+    /** Usual interval of readings in s; NaN before the second. */
     double interval() {
-        return intervals.median();
+        return intervals.seconds();
     }
 
     boolean intervalKnown() {

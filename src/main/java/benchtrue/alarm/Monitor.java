@@ -79,7 +79,7 @@ public final class Monitor {
         return channels.notices();
     }
 
-    /** Silences of more than three median intervals. */
+    /** Silences of more than three usual intervals. */
     public long gaps() {
         return clock.gaps();
     }

@@ -31,7 +31,9 @@ public final class Main {
         CommandLine commands = new CommandLine(new RootCommand(output))
                 .addSubcommand(new CheckCommand(output))
                 .addSubcommand(new ReplayCommand(output, environment))
-                .addSubcommand(new RehearseCommand(output));
+                .addSubcommand(new WatchCommand(output, environment))
+                .addSubcommand(new RehearseCommand(output))
+                .addSubcommand(new PortsCommand(output));
         commands.setUsageHelpAutoWidth(false);
         commands.setParameterExceptionHandler((wrong, arguments) -> {
             output.error(String.valueOf(wrong.getMessage()));

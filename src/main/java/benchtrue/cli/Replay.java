@@ -5,16 +5,12 @@ import benchtrue.record.RunFiles;
 import benchtrue.run.Closing;
 import benchtrue.run.Desk;
 import benchtrue.run.Options;
-import benchtrue.run.ReferenceRun;
 import benchtrue.run.RunListener;
 import benchtrue.run.Runner;
 import benchtrue.run.Setup;
 import benchtrue.run.SourceMaker;
-import benchtrue.sheet.BenchSheet;
-import benchtrue.sheet.Group;
 import java.io.IOException;
 import java.nio.file.Path;
-import java.util.ArrayList;
 import java.util.List;
 import org.jspecify.annotations.Nullable;
 
@@ -31,41 +27,9 @@ final class Replay {
         this.run = run;
         this.options = options;
         this.output = output;
-        setup = setup(run, references());
-    }
-
-    private static Setup setup(RunFolder run, List<@Nullable ReferenceModel> references) throws IOException {
-        return new Setup(run.sheet(), false, "replay", run.name(), run.sha256(), references);
-    }
-
-    /** From the command line, else from the sheet. */
-    private List<@Nullable ReferenceModel> references() throws Refusal, IOException {
-        BenchSheet sheet = run.sheet();
-        Path from = options.reference();
-        if (from == null && sheet.reference().fromRun() != null) {
-            from = run.sheetFile().resolveSibling(sheet.reference().fromRun());
-        }
-        if (from == null) {
-            return none(sheet);
-        }
-        RunFolder earlier = RunFolder.open(from, output);
-        ReferenceRun reference =
-                ReferenceRun.of(setup(earlier, none(earlier.sheet())), earlier.maker(), earlier.acts());
-        String refusal = reference.refusal(sheet);
-        if (!refusal.isEmpty()) {
-            throw new Refusal(from + ": cannot be the reference: " + refusal + "; name another run with --reference");
-        }
-        return reference.models(sheet);
-    }
-
-    private static List<@Nullable ReferenceModel> none(BenchSheet sheet) {
-        List<@Nullable ReferenceModel> none = new ArrayList<>();
-        for (Group group : sheet.groups()) {
-            if (!group.relations().isEmpty()) {
-                none.add(null);
-            }
-        }
-        return none;
+        List<@Nullable ReferenceModel> references =
+                References.of(run.sheet(), run.sheetFile(), options.reference(), output);
+        setup = new Setup(run.sheet(), false, "replay", run.name(), run.sha256(), references);
     }
 
     /** @param told whether lines say what happens */
@@ -93,7 +57,7 @@ final class Replay {
             return new Runner(setup, maker, maker, driven, new Listeners(lines, null), desk).run();
         }
         OutFolder.claim(out, options.yes());
-        try (RunFiles files = new RunFiles(out, run.sheet(), options.every(), errors::error)) {
+        try (RunFiles files = RunFiles.begin(out, run.sheet(), options.every(), errors::error)) {
             return new Runner(setup, maker, maker, driven, new Listeners(lines, files), desk).run();
         }
     }

@@ -1,7 +1,6 @@
 package benchtrue.cli;
 
 import benchtrue.record.SummaryJson;
-import benchtrue.record.SummaryText;
 import benchtrue.run.Closing;
 import benchtrue.run.Desk;
 import java.nio.file.Path;
@@ -57,7 +56,11 @@ final class ReplayCommand implements Callable<Integer> {
     }
 
     private void check() {
-        options.every();
+        if (options.every() > 1 && options.out() == null) {
+            throw new ParameterException(
+                    spec.commandLine(),
+                    "--every says how often estimates.csv gets a row, and without --out there is no such file");
+        }
         options.pace();
         options.memory();
         if (runs.size() > 1 && options.out() != null) {
@@ -73,28 +76,10 @@ final class ReplayCommand implements Callable<Integer> {
 
     private Integer one(Output out) throws Exception {
         Replay replay = new Replay(open(runs.get(0), out), options, out);
-        Desk desk = new Desk();
-        Departure departure = Departure.of(desk);
-        try {
-            Closing closing = inPanes() ? replay.inPanes(desk) : replay.inLines(!options.json(), desk);
-            tell(closing, out);
-            return closing.status();
-        } finally {
-            departure.done();
-        }
-    }
-
-    private boolean inPanes() {
-        return !options.plain() && !options.json() && Surroundings.canDraw(environment);
-    }
-
-    private void tell(Closing closing, Output out) {
-        if (options.json()) {
-            out.json(SummaryJson.of(closing));
-        } else {
-            out.line("");
-            out.text(SummaryText.brief(closing));
-        }
+        return EndOfRun.tell(
+                out,
+                options,
+                desk -> options.inPanes(environment) ? replay.inPanes(desk) : replay.inLines(!options.json(), desk));
     }
 
     /** Each for itself: one that cannot be opened does not stop the others. */

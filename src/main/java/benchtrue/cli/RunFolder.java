@@ -1,12 +1,10 @@
 package benchtrue.cli;
 
-import benchtrue.model.Forgetting;
 import benchtrue.model.Memory;
 import benchtrue.record.ActsFile;
 import benchtrue.run.SourceMaker;
 import benchtrue.run.TimedAct;
 import benchtrue.sheet.BenchSheet;
-import benchtrue.sheet.Group;
 import benchtrue.sheet.Mistake;
 import benchtrue.sheet.SheetReader;
 import benchtrue.sheet.SheetReading;
@@ -101,13 +99,7 @@ record RunFolder(String name, Path sheetFile, BenchSheet sheet, Path readings, L
         if (memory == null) {
             return this;
         }
-        List<Group> groups = sheet.groups().stream()
-                .map(g -> new Group(
-                        g.relations(),
-                        g.unknowns(),
-                        new Forgetting(g.forgetting().kind(), memory)))
-                .toList();
-        return new RunFolder(name, sheetFile, sheet.with(groups), readings, acts);
+        return new RunFolder(name, sheetFile, sheet.with(memory), readings, acts);
     }
 
     /** Opens the readings from their beginning. */

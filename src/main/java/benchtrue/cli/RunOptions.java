@@ -3,6 +3,7 @@ package benchtrue.cli;
 import benchtrue.model.Memory;
 import benchtrue.sheet.MemoryText;
 import java.nio.file.Path;
+import java.util.Map;
 import org.jspecify.annotations.Nullable;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
@@ -58,8 +59,9 @@ final class RunOptions {
     @Option(names = "--yes", description = "Answer questions with yes, and replace files that no replay wrote.")
     private boolean yes;
 
-    boolean plain() {
-        return plain;
+    /** Whether the run is to be shown in panes. */
+    boolean inPanes(Map<String, String> environment) {
+        return !plain && !json && Surroundings.canDraw(environment);
     }
 
     /** Times real time; infinite: as fast as it goes; null: not given. */
@@ -115,9 +117,6 @@ final class RunOptions {
     long every() {
         if (every < 1) {
             throw wrong("--every: " + every + " is below 1");
-        }
-        if (every > 1 && out == null) {
-            throw wrong("--every says how often estimates.csv gets a row, and without --out there is no such file");
         }
         return every;
     }

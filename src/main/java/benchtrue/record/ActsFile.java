@@ -29,12 +29,16 @@ public final class ActsFile implements Closeable {
 
     private final CsvOut csv;
 
-    /** Begins the file. */
-    public ActsFile(Path folder, Consumer<String> trouble) {
-        csv = new CsvOut(new GrowingFile(folder.resolve(NAME), trouble));
-        COLUMNS.forEach(csv::text);
-        csv.endRow();
-        csv.flush();
+    /** Begins the file, or goes on with the one that is there. */
+    ActsFile(Path folder, Consumer<String> trouble) {
+        Path file = folder.resolve(NAME);
+        boolean there = Files.exists(file);
+        csv = new CsvOut(GrowingFile.goingOn(file, trouble));
+        if (!there) {
+            COLUMNS.forEach(csv::text);
+            csv.endRow();
+            csv.flush();
+        }
     }
 
     public void act(TimedAct timed) {

@@ -5,7 +5,9 @@ import java.io.Closeable;
 import java.io.IOException;
 import java.io.OutputStream;
 import java.nio.file.Files;
+import java.nio.file.OpenOption;
 import java.nio.file.Path;
+import java.nio.file.StandardOpenOption;
 import java.util.function.Consumer;
 
 /**
@@ -19,10 +21,19 @@ final class GrowingFile implements Closeable {
 
     /** Begins the file afresh. */
     GrowingFile(Path path, Consumer<String> trouble) {
+        this(path, trouble, StandardOpenOption.CREATE, StandardOpenOption.TRUNCATE_EXISTING, StandardOpenOption.WRITE);
+    }
+
+    /** Goes on behind what is in the file. */
+    static GrowingFile goingOn(Path path, Consumer<String> trouble) {
+        return new GrowingFile(path, trouble, StandardOpenOption.CREATE, StandardOpenOption.APPEND);
+    }
+
+    private GrowingFile(Path path, Consumer<String> trouble, OpenOption... options) {
         this.path = path;
         this.trouble = trouble;
         try {
-            out = Files.newOutputStream(path);
+            out = Files.newOutputStream(path, options);
         } catch (IOException e) {
             out = giveUp(e);
         }

@@ -30,21 +30,37 @@ public final class RunFiles implements RunListener, Closeable {
     private EstimatesFile estimates;
     private EventsFile events;
     private @Nullable ActsFile acts;
+    private int known;
 
     /**
-     * Begins the files afresh.
+     * Begins the files afresh, those of the acts too.
      *
      * @param folder exists
      * @param every one row of estimates.csv for so many readings, at least 1
      */
-    public RunFiles(Path folder, BenchSheet sheet, long every, Consumer<String> trouble) {
+    public static RunFiles begin(Path folder, BenchSheet sheet, long every, Consumer<String> trouble) {
+        RunFiles files = new RunFiles(folder, sheet, every, 0, trouble);
+        files.forgetActs();
+        return files;
+    }
+
+    /**
+     * Begins afresh what can be computed again, and goes on with the acts of a recorded run.
+     *
+     * @param acts how many are in the file; the run tells them again
+     */
+    public static RunFiles resume(Path folder, BenchSheet sheet, long every, int acts, Consumer<String> trouble) {
+        return new RunFiles(folder, sheet, every, acts, trouble);
+    }
+
+    private RunFiles(Path folder, BenchSheet sheet, long every, int known, Consumer<String> trouble) {
         this.folder = folder;
         this.sheet = sheet;
         this.every = every;
         this.trouble = trouble;
         estimates = new EstimatesFile(folder, sheet, every, trouble);
         events = new EventsFile(folder, trouble);
-        forgetActs();
+        this.known = known;
     }
 
     /** Those of an earlier run into the same folder. */
@@ -90,6 +106,10 @@ public final class RunFiles implements RunListener, Closeable {
     /** The file of acts begins with the first of them. */
     @Override
     public void act(TimedAct act) {
+        if (known > 0) {
+            known--;
+            return;
+        }
         if (acts == null) {
             acts = new ActsFile(folder, trouble);
         }
@@ -103,7 +123,8 @@ public final class RunFiles implements RunListener, Closeable {
         estimates = new EstimatesFile(folder, sheet, every, trouble);
         events = new EventsFile(folder, trouble);
         if (acts != null) {
-            acts = new ActsFile(folder, trouble);
+            forgetActs();
+            acts = null;
         }
     }
 

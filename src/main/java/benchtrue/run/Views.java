@@ -82,7 +82,7 @@ final class Views {
                 pace,
                 readingAge,
                 engine.acts().onHold(),
-                counts(),
+                counts(source),
                 channels(sheet, monitor),
                 relations,
                 monitor.book().alarms(),
@@ -92,7 +92,7 @@ final class Views {
                 closing);
     }
 
-    private Snapshot.Counts counts() {
+    private Snapshot.Counts counts(Source source) {
         Tally tally = engine.tally();
         return new Snapshot.Counts(
                 tally.seen(),
@@ -102,8 +102,8 @@ final class Views {
                 tally.malformedCount(),
                 tally.count(Tally.Fate.MISSING),
                 engine.monitor().gaps(),
-                0,
-                0);
+                source.lost(),
+                source.queued());
     }
 
     private List<Snapshot.ChannelView> channels(BenchSheet sheet, Monitor monitor) {

@@ -1,6 +1,8 @@
 package benchtrue.sheet;
 
 import benchtrue.model.DecisionRule;
+import benchtrue.model.Forgetting;
+import benchtrue.model.Memory;
 import java.util.List;
 import org.jspecify.annotations.Nullable;
 
@@ -35,8 +37,14 @@ public record BenchSheet(
         @Nullable Rehearsal rehearsal,
         String sha256) {
 
-    /** The same with other groups. */
-    public BenchSheet with(List<Group> otherGroups) {
+    /** The same with another memory in all its relations. */
+    public BenchSheet with(Memory memory) {
+        List<Group> otherGroups = groups.stream()
+                .map(g -> new Group(
+                        g.relations(),
+                        g.unknowns(),
+                        new Forgetting(g.forgetting().kind(), memory)))
+                .toList();
         return new BenchSheet(
                 title,
                 item,

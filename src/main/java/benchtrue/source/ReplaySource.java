@@ -16,7 +16,7 @@ public final class ReplaySource {
     public static Opened open(Path readingsCsv, BenchSheet sheet) {
         CsvRows rows = null;
         try {
-            rows = new CsvRows(Files.newInputStream(readingsCsv));
+            rows = new CsvRows(WholeLines.of(readingsCsv));
             Opened opened = open(readingsCsv, sheet, rows);
             if (opened instanceof Opened.Refused) {
                 rows.close();

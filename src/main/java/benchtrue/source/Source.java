@@ -38,6 +38,16 @@ public interface Source extends Closeable {
     @Nullable
     Instant startedUtc();
 
+    /** Lines that came and could not be kept for the run (live sources only). */
+    default long lost() {
+        return 0;
+    }
+
+    /** Lines that came and wait for the run (live sources only). */
+    default int queued() {
+        return 0;
+    }
+
     /** How much of the source is read, 0…1; NaN where that is not known. */
     double progress();
 }

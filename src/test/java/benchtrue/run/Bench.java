@@ -30,6 +30,10 @@ final class Bench {
     private Bench() {}
 
     static BenchSheet sheet(Memory memory, double otherOfV) {
+        return sheet(new Forgetting(Forgetting.Kind.EXPONENTIAL, memory), otherOfV);
+    }
+
+    static BenchSheet sheet(Forgetting forgetting, double otherOfV) {
         Scope scope = Scope.EMPTY.withChannel("I", unit("A"), Double.NaN).withChannel("V", unit("V"), Double.NaN);
         Relation relation =
                 Relation.parse("V = R*I + V0", scope, Map.of(), null).get();
@@ -37,7 +41,7 @@ final class Bench {
                 .map(u -> new UnknownSpec(u.name(), u.unit(), u.constantTerm(), null, Double.NaN, null, 0))
                 .toList();
         RelationSpec spec = new RelationSpec(relation, "V", true, new int[] {0, 1});
-        Group group = new Group(List.of(spec), unknowns, new Forgetting(Forgetting.Kind.EXPONENTIAL, memory));
+        Group group = new Group(List.of(spec), unknowns, forgetting);
         return new BenchSheet(
                 "Resistor on the bench",
                 "R17",

@@ -6,7 +6,6 @@ import static org.assertj.core.api.Assertions.within;
 import benchtrue.model.Forgetting;
 import benchtrue.model.Memory;
 import benchtrue.sheet.BenchSheet;
-import benchtrue.sheet.Group;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -78,10 +77,7 @@ final class RunnerTest {
     @Test
     void directionalForgettingAgreesWithItsSecondComputation() throws InterruptedException {
         Forgetting directional = new Forgetting(Forgetting.Kind.DIRECTIONAL, new Memory.Readings(150));
-        BenchSheet sheet = Bench.sheet(new Memory.All(), 0);
-        Group group = sheet.groups().get(0);
-        BenchSheet other = sheet.with(List.of(new Group(group.relations(), group.unknowns(), directional)));
-        Closing closing = run(other, new Bench.Made(1500, 9, 9999, 0), new Kept());
+        Closing closing = run(Bench.sheet(directional, 0), new Bench.Made(1500, 9, 9999, 0), new Kept());
         Closing.Relation relation = closing.relations().get(0);
         assertThat(relation.batch()).isNotNull();
         assertThat(relation.batch().largestDifferenceInU()).isLessThan(1e-6);
