@@ -1,9 +1,13 @@
 package benchtrue.cli;
 
 import benchtrue.sheet.BenchSheet;
+import benchtrue.sheet.LineSpec;
+import benchtrue.sheet.PollSpec;
 import benchtrue.sheet.Rehearsal;
+import benchtrue.source.CableFaults;
 import benchtrue.source.Failure;
 import benchtrue.source.LinePlayer;
+import benchtrue.source.PollAnswerer;
 import benchtrue.source.Rehearsed;
 import benchtrue.source.RehearsedLines;
 import benchtrue.source.Rehearsing;
@@ -50,9 +54,13 @@ final class RehearseCommand implements Callable<Integer> {
                 names = "--onto",
                 required = true,
                 paramLabel = "PORT",
-                description = "Play the lines out onto this port at their real pace.")
+                description =
+                        "Be the instrument on this port: play the lines out, or answer where the sheet has [poll].")
         private @Nullable String port;
     }
+
+    @ArgGroup(exclusive = false)
+    private @Nullable OntoOptions onto;
 
     RehearseCommand(Output output) {
         this.output = output;
@@ -67,9 +75,12 @@ final class RehearseCommand implements Callable<Integer> {
         }
         long used = seed == null ? rehearsal.seed() : seed;
         if (target.out != null) {
+            if (onto != null) {
+                throw new Refusal("--pace, --cut and --garble are for --onto PORT; leave them out with --out");
+            }
             write(sheet, rehearsal, target.out, used);
         } else if (target.port != null) {
-            play(new RehearsedLines(sheet, rehearsal, used), target.port);
+            play(sheet, rehearsal, target.port, used);
         }
         return ExitStatus.NOTHING_FOUND.code();
     }
@@ -83,12 +94,26 @@ final class RehearseCommand implements Callable<Integer> {
         output.line(readings + " readings with seed " + used + " in " + out + ". To see them: benchtrue replay " + out);
     }
 
-    private void play(RehearsedLines lines, String port) throws Refusal, InterruptedException {
+    private void play(BenchSheet sheet, Rehearsal rehearsal, String port, long used)
+            throws Refusal, InterruptedException {
+        double pace = onto == null ? 1 : onto.pace();
+        CableFaults faults = onto == null ? CableFaults.NONE : onto.faults();
+        PollSpec poll = sheet.poll();
+        LineSpec line = sheet.line();
+        if (poll != null && Double.isInfinite(pace)) {
+            throw new Refusal("--pace max: a rig that is asked needs a pace; give a number");
+        }
         if (!LinePlayer.isPseudoTerminal(port) && !yes && !confirmed(port)) {
             throw new Refusal(port + ": nothing was sent; use a pseudo-terminal, or confirm with yes");
         }
         try {
-            output.line(LinePlayer.play(lines, port, lines.line()) + " lines sent to " + port);
+            if (poll != null && line != null) {
+                long answers = PollAnswerer.answer(sheet, rehearsal, poll, line, port, pace, faults, used);
+                output.line(answers + " questions answered on " + port);
+            } else {
+                RehearsedLines lines = new RehearsedLines(sheet, rehearsal, used);
+                output.line(LinePlayer.play(lines, port, lines.line(), pace, faults, used) + " lines sent to " + port);
+            }
         } catch (IOException e) {
             throw new Refusal(
                     ExitStatus.SOURCE_LOST,

@@ -9,8 +9,7 @@ import java.util.concurrent.TimeUnit;
 public final class LinePlayer {
     private static final String END = "\r\n";
 
-    /** Closing a port throws away what its other end has not yet taken. */
-    private static final long TAKEN_MILLIS = 250;
+    private static final double NANOS = 1e9;
 
     private LinePlayer() {}
 
@@ -23,21 +22,27 @@ public final class LinePlayer {
      * Returns when the last line is sent.
      *
      * @param line baud and frame of the port; a pseudo-terminal takes any
-     * @return how many lines were sent
+     * @param pace times real time; infinite: as fast as the port takes the lines
+     * @return how many lines were sent, those that the cable lost included
      * @throws IOException where the port cannot be opened, or is gone
      */
-    public static long play(RehearsedLines lines, String port, LineSpec line) throws IOException, InterruptedException {
+    public static long play(
+            RehearsedLines lines, String port, LineSpec line, double pace, CableFaults faults, long seed)
+            throws IOException, InterruptedException {
+        Cable cable = new Cable(faults, seed);
         try (PortLink link = PortLink.open(port, line)) {
             long start = System.nanoTime();
             long count = 0;
             while (lines.next()) {
-                long due = start + (long) (lines.seconds() * 1e9);
-                TimeUnit.NANOSECONDS.sleep(due - System.nanoTime());
-                byte[] bytes = (lines.text() + END).getBytes(StandardCharsets.UTF_8);
-                link.write(bytes, bytes.length);
+                TimeUnit.NANOSECONDS.sleep(start + (long) (lines.seconds() / pace * NANOS) - System.nanoTime());
+                byte[] bytes = cable.carry(
+                        (lines.text() + END).getBytes(StandardCharsets.UTF_8), (System.nanoTime() - start) / NANOS);
+                if (bytes.length > 0) {
+                    link.write(bytes, bytes.length);
+                }
                 count++;
             }
-            TimeUnit.MILLISECONDS.sleep(TAKEN_MILLIS);
+            link.drain();
             return count;
         }
     }

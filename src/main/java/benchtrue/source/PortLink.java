@@ -6,6 +6,7 @@ import com.fazecast.jSerialComm.SerialPortInvalidPortException;
 import java.io.Closeable;
 import java.io.IOException;
 import java.nio.file.Path;
+import java.util.concurrent.TimeUnit;
 
 /** An open serial port. It is one attempt: a port that is gone is closed, and opened again as another object. */
 final class PortLink implements SerialLink, Closeable {
@@ -18,6 +19,8 @@ final class PortLink implements SerialLink, Closeable {
     private static final int GONE = 2;
     private static final int BUSY = 11;
     private static final int FORBIDDEN = 13;
+
+    private static final long TAKEN_MILLIS = 250;
 
     private final SerialPort port;
 
@@ -105,6 +108,11 @@ final class PortLink implements SerialLink, Closeable {
         if (old > 0) {
             port.readBytes(new byte[old], old);
         }
+    }
+
+    /** Waits until the other end has taken what was written, as far as that can be known: closing throws the rest away. */
+    void drain() throws InterruptedException {
+        TimeUnit.MILLISECONDS.sleep(TAKEN_MILLIS);
     }
 
     /** Frees a {@link #read} that waits in another thread. */
