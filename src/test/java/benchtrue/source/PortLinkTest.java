@@ -61,7 +61,7 @@ class PortLinkTest {
     void aPulledCableIsGoneForReadingAndForWriting() throws IOException {
         TerminalPair pair = new TerminalPair(folder);
         try (PortLink near = PortLink.open(pair.near(), LINE)) {
-            pair.close();
+            pair.pull();
             assertThat(near.read(buffer)).isEqualTo(-1);
             assertThatThrownBy(() -> send(near, "x"))
                     .isInstanceOf(IOException.class)

@@ -33,9 +33,13 @@ final class TerminalPair implements AutoCloseable {
         return far.toString();
     }
 
-    /** As pulling the cable: both terminals vanish. */
     @Override
     public void close() {
+        pull();
+    }
+
+    /** As pulling the cable: both terminals vanish. */
+    void pull() {
         process.destroy();
         process.onExit().join();
     }
