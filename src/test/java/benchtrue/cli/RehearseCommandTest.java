@@ -96,10 +96,17 @@ class RehearseCommandTest {
             assertThat(run("rehearse", sheet.toString(), "--onto", near.toString()))
                     .isZero();
             assertThat(System.nanoTime() - start).as("real pace").isGreaterThan(190_000_000L);
-            await().until(() -> Files.exists(received) && Files.size(received) >= 180);
-            assertThat(Files.readString(received))
+            assertThat(run("rehearse", sheet.toString(), "--onto", near.toString(), "--pace", "max", "--garble", "1"))
+                    .isZero();
+            await().until(() -> Files.exists(received) && Files.size(received) >= 360);
+            String sent = Files.readString(received, StandardCharsets.ISO_8859_1);
+            assertThat(sent.substring(0, 180))
                     .startsWith("0,0;0,0\r\n0,1;0,2\r\n")
                     .endsWith("1,9;3,8\r\n");
+            assertThat(sent).hasSize(360);
+            for (int line = 0; line < 180; line += 9) {
+                assertThat(sent.substring(180 + line, 189 + line)).isNotEqualTo(sent.substring(line, 9 + line));
+            }
         } finally {
             pair.destroy();
             pair.waitFor();
@@ -119,5 +126,49 @@ class RehearseCommandTest {
         assertThat(errors()).contains("nothing was sent");
         assertThat(run("rehearse", RIG, "--onto", "/dev/ttyS77", "--yes")).isEqualTo(5);
         assertThat(errors()).contains("/dev/ttyS77: there is no such port");
+    }
+
+    @Test
+    void optionsOfThePortAreRefusedWhereTheyMeanNothing() throws Exception {
+        String run = folder.resolve("run").toString();
+        assertThat(run("rehearse", RIG, "--out", run, "--pace", "2")).isEqualTo(2);
+        assertThat(errors()).contains("--pace, --cut and --garble are for --onto PORT");
+        assertThat(run("rehearse", RIG, "--onto", "none", "--pace", "0")).isEqualTo(2);
+        assertThat(errors()).contains("--pace: \"0\" is neither a number above 0 nor max");
+        assertThat(run("rehearse", RIG, "--onto", "none", "--cut", "5:60")).isEqualTo(2);
+        assertThat(errors()).contains("--cut: \"5:60\" must be two numbers of seconds, the longer first, as in 60:5");
+        assertThat(run("rehearse", RIG, "--onto", "none", "--cut", "5")).isEqualTo(2);
+        assertThat(run("rehearse", RIG, "--onto", "none", "--garble", "1.1")).isEqualTo(2);
+        assertThat(errors()).contains("--garble: \"1.1\" is no probability; give a number from 0 to 1");
+        assertThat(folder.resolve("run")).doesNotExist();
+    }
+
+    @Test
+    void aRigThatIsAskedNeedsAPace() throws Exception {
+        Path sheet = Files.writeString(folder.resolve("asked.toml"), """
+                title = "asked"
+                [channels]
+                x = { unit = "V", resolution = 0.1 }
+                y = { unit = "V", resolution = 0.1 }
+                [[relations]]
+                equation = "y = a*x"
+                [line]
+                baud = 9600
+                [poll]
+                kind = "scpi"
+                [poll.channels]
+                x = { query = "X?" }
+                y = { query = "Y?" }
+                [rehearsal]
+                rate = 10
+                duration = 1
+                [rehearsal.truth]
+                a = 2
+                [rehearsal.channels]
+                x = { ramps = [[0, 0], [1, 2]] }
+                """);
+        assertThat(run("rehearse", sheet.toString(), "--onto", "none", "--pace", "max"))
+                .isEqualTo(2);
+        assertThat(errors()).contains("--pace max: a rig that is asked needs a pace; give a number");
     }
 }
