@@ -8,7 +8,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 
 /** Two pseudo-terminals joined by socat: what goes into one comes out of the other. */
-final class TerminalPair implements AutoCloseable {
+public final class TerminalPair implements AutoCloseable {
     private static final Path SOCAT = Path.of("/usr/bin/socat");
 
     private final Process process;
@@ -16,7 +16,7 @@ final class TerminalPair implements AutoCloseable {
     private final Path far;
 
     /** Skips the test where there is no socat. */
-    TerminalPair(Path folder) throws IOException {
+    public TerminalPair(Path folder) throws IOException {
         assumeTrue(Files.isExecutable(SOCAT), "needs socat to make pseudo-terminals");
         near = folder.resolve("near");
         far = folder.resolve("far");
@@ -25,11 +25,11 @@ final class TerminalPair implements AutoCloseable {
         await().until(() -> Files.exists(near) && Files.exists(far));
     }
 
-    String near() {
+    public String near() {
         return near.toString();
     }
 
-    String far() {
+    public String far() {
         return far.toString();
     }
 
