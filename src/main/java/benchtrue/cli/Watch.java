@@ -13,6 +13,7 @@ import benchtrue.run.SourceMaker;
 import benchtrue.run.TimedAct;
 import benchtrue.sheet.BenchSheet;
 import benchtrue.source.Opened;
+import benchtrue.source.PolledSource;
 import benchtrue.source.Recorded;
 import benchtrue.source.ReplaySource;
 import benchtrue.source.ResumedSource;
@@ -83,7 +84,9 @@ final class Watch {
 
     private Source open(Recorded before, Recorder recorder) throws Refusal {
         try {
-            return SerialSource.open(port, sheet, before, recorder);
+            return sheet.poll() == null
+                    ? SerialSource.open(port, sheet, before, recorder)
+                    : PolledSource.open(port, sheet, before, recorder);
         } catch (IOException e) {
             throw new Refusal(
                     ExitStatus.SOURCE_LOST,

@@ -37,6 +37,7 @@ final class PolledLine {
     private final byte[] chunk = new byte[CHUNK];
     private final byte[] answer = new byte[LONGEST];
     private final String patience;
+    private final String[] told;
     private long lastByte;
     private long due;
 
@@ -48,6 +49,8 @@ final class PolledLine {
         timeoutNanos = (long) (spec.timeoutSeconds() * NANOS);
         this.link = link;
         this.ticker = ticker;
+        told = new String[channels.size()];
+        Arrays.fill(told, "");
         patience = " within " + seconds(timeoutNanos);
         due = ticker.nanos();
         lastByte = due;
@@ -79,6 +82,7 @@ final class PolledLine {
     private static final class Round {
         private final double[] values;
         private final long[] stamps;
+        private final byte[][] answers;
         private final List<String> problems = new ArrayList<>();
         private long first;
         private boolean answered;
@@ -86,18 +90,19 @@ final class PolledLine {
         Round(int channels) {
             values = new double[channels];
             stamps = new long[channels];
+            answers = new byte[channels][0];
             Arrays.fill(values, Double.NaN);
         }
 
-        void answered(int channel, double value, long stamp) {
-            values[channel] = value;
+        void came(int channel, byte[] bytes, long stamp) {
+            first = Arrays.stream(answers).allMatch(a -> a.length == 0) ? stamp : first;
+            answers[channel] = bytes;
             stamps[channel] = stamp;
-            first = answered ? first : stamp;
-            answered = true;
         }
 
         Polled done(long now) {
-            return new Polled(answered ? first : now, values, stamps, problems, answered);
+            boolean came = Arrays.stream(answers).anyMatch(a -> a.length > 0);
+            return new Polled(came ? first : now, values, stamps, answers, problems, answered);
         }
     }
 
@@ -151,17 +156,17 @@ final class PolledLine {
                 reply = poller.reply(channel, answer, length);
             }
         }
-        settle(channel, reply, length, stamp, round);
+        if (length > 0) {
+            round.came(channel, Arrays.copyOf(answer, length), stamp);
+        }
+        settle(channel, reply, length, round);
     }
 
-    private void settle(int channel, Reply reply, int length, long stamp, Round round) {
+    private void settle(int channel, Reply reply, int length, Round round) {
         if (reply instanceof Value value) {
-            backOff(channel).answered();
-            round.answered(channel, value.value(), stamp);
+            answered(channel, value.value(), "", round);
         } else if (reply instanceof NoValue none) {
-            backOff(channel).answered();
-            round.answered(channel, Double.NaN, stamp);
-            round.problems.add(channels.get(channel) + ": " + none.why());
+            answered(channel, Double.NaN, none.why(), round);
         } else if (reply instanceof Garbled garbled) {
             failed(channel, garbled.why(), round);
         } else if (length == 0) {
@@ -169,6 +174,17 @@ final class PolledLine {
         } else {
             failed(channel, "no whole answer" + patience + " (" + length + " bytes came)", round);
         }
+    }
+
+    /** @param why there is no value; empty where there is one */
+    private void answered(int channel, double value, String why, Round round) {
+        backOff(channel).answered();
+        round.answered = true;
+        round.values[channel] = value;
+        if (!why.isEmpty() && !why.equals(told[channel])) {
+            round.problems.add(channels.get(channel) + ": " + why);
+        }
+        told[channel] = why;
     }
 
     private void failed(int channel, String why, Round round) {

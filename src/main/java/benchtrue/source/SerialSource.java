@@ -13,32 +13,23 @@ import org.jspecify.annotations.Nullable;
  * both are whole microseconds since the first.
  */
 public final class SerialSource implements Source {
-    private static final long NANOS_PER_MICRO = 1000;
-    private static final long MICROS = 1_000_000;
     private static final long WAIT_MILLIS = 20;
 
     private final String port;
     private final Recording recording;
     private final SerialReader reader;
     private final LineParser parser;
-    private final DeviceClock clock = new DeviceClock();
-    private long count;
+    private final LiveClock clock;
     private boolean gone;
     private String problem = "";
-    private @Nullable Instant started;
 
     private SerialSource(
             String port, BenchSheet sheet, LineSpec spec, PortLink link, Recorded before, Recording recording) {
         this.port = port;
         this.recording = recording;
         parser = new LineParser(sheet);
-        ArrivalClock stamps = new ArrivalClock(System.nanoTime(), Instant.now(), before.lastUtcMicros() + 1);
-        reader = new SerialReader(port, spec, link, stamps, recording);
-        count = before.readings();
-        started = before.started();
-        if (started != null) {
-            clock.take(micros(started) * NANOS_PER_MICRO);
-        }
+        clock = new LiveClock(before);
+        reader = new SerialReader(port, spec, link, clock.arrivals(), recording);
         Thread thread = new Thread(reader, "line " + port);
         thread.setDaemon(true);
         thread.start();
@@ -55,10 +46,6 @@ public final class SerialSource implements Source {
             throws IOException {
         LineSpec spec = Objects.requireNonNull(sheet.line());
         return new SerialSource(port, sheet, spec, PortLink.open(port, spec), before, recording);
-    }
-
-    private static long micros(Instant instant) {
-        return instant.getEpochSecond() * MICROS + instant.getNano() / NANOS_PER_MICRO;
     }
 
     @Override
@@ -96,13 +83,7 @@ public final class SerialSource implements Source {
             return Outcome.MALFORMED;
         }
         recording.reading(arrival.utcMicros(), into.values);
-        if (started == null) {
-            started = Instant.ofEpochSecond(
-                    Math.floorDiv(arrival.utcMicros(), MICROS),
-                    Math.floorMod(arrival.utcMicros(), MICROS) * NANOS_PER_MICRO);
-        }
-        into.number = ++count;
-        into.time = clock.take(arrival.utcMicros() * NANOS_PER_MICRO);
+        clock.take(arrival.utcMicros(), into);
         return Outcome.READING;
     }
 
@@ -113,7 +94,7 @@ public final class SerialSource implements Source {
 
     @Override
     public @Nullable Instant startedUtc() {
-        return started;
+        return clock.started();
     }
 
     @Override

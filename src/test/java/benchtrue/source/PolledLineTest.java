@@ -106,6 +106,7 @@ class PolledLineTest {
         assertThat(round.values()).containsExactly(1.5, 3.25);
         assertThat(round.stamps()).containsExactly(1 + 10 * MILLI, 1 + 20 * MILLI);
         assertThat(round.nanos()).isEqualTo(1 + 10 * MILLI);
+        assertThat(round.answers()[1]).asString(StandardCharsets.US_ASCII).isEqualTo("3.25\n");
         assertThat(round.problems()).isEmpty();
         assertThat(round.answered()).isTrue();
     }
@@ -200,11 +201,15 @@ class PolledLineTest {
     @Test
     void anOverloadIsNoFailure() throws Exception {
         PolledLine polled = scpi();
-        line.replies.addAll(List.of("9.9E37\n", "2\n", "1\n", "2\n"));
+        line.replies.addAll(List.of("9.9E37\n", "2\n", "9.9E37\n", "2\n", "1\n", "2\n", "9.9E37\n", "2\n"));
         Polled round = polled.next();
         assertThat(round.values()).containsExactly(Double.NaN, 2);
         assertThat(round.problems()).containsExactly("I: it answers 9.9E37: overload");
+        Polled still = polled.next();
+        assertThat(still.values()).containsExactly(Double.NaN, 2);
+        assertThat(still.problems()).as("its beginning is told, once").isEmpty();
         assertThat(polled.next().values()).containsExactly(1, 2);
+        assertThat(polled.next().problems()).containsExactly("I: it answers 9.9E37: overload");
     }
 
     @Test
