@@ -5,6 +5,7 @@ import benchtrue.sheet.BenchSheet;
 import benchtrue.sheet.Channel;
 import benchtrue.sheet.Derived;
 import benchtrue.sheet.Group;
+import benchtrue.sheet.PollSpec;
 import benchtrue.sheet.RelationSpec;
 import benchtrue.sheet.Result;
 import benchtrue.sheet.UnknownSpec;
@@ -41,6 +42,10 @@ public final class SheetPage {
                     "= " + derived.expression().text());
         }
         page.table(channels);
+        PollSpec poll = sheet.poll();
+        if (poll != null) {
+            PollText.write(page, sheet, poll);
+        }
         results(page, sheet);
         page.paragraph("Decision rule: "
                 + (sheet.rule() == null

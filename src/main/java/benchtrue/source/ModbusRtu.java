@@ -113,10 +113,8 @@ final class ModbusRtu implements Poller {
     }
 
     private static Reply value(Register register, byte[] bytes) {
-        double number = RegisterValues.number(register, ByteBuffer.wrap(bytes, HEAD, bytes.length - HEAD));
-        return Double.isFinite(number)
-                ? new Value(number * register.scale())
-                : new NoValue("it answers no finite number");
+        double value = RegisterValues.value(register, ByteBuffer.wrap(bytes, HEAD, bytes.length - HEAD));
+        return Double.isFinite(value) ? new Value(value) : new NoValue("it answers no finite number");
     }
 
     /** Of exception codes, as chapter 7 of the protocol has them. */

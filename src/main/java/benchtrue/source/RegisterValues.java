@@ -2,14 +2,28 @@ package benchtrue.source;
 
 import benchtrue.sheet.PollSpec.NumberType;
 import benchtrue.sheet.PollSpec.Register;
+import java.math.BigDecimal;
 import java.nio.ByteBuffer;
 
 /** Numbers in registers, in both directions. */
 final class RegisterValues {
     private RegisterValues() {}
 
-    /** @param data from where it stands on, as it came over the line */
-    static double number(Register register, ByteBuffer data) {
+    /**
+     * A value in the channel's unit. Whole numbers are scaled as decimals, so that 2002 at 0.001 is 2.002 and nothing beside it.
+     *
+     * @param data from where it stands on, as it came over the line
+     */
+    static double value(Register register, ByteBuffer data) {
+        double number = number(register, data);
+        return register.type() == NumberType.FLOAT32
+                ? number * register.scale()
+                : BigDecimal.valueOf((long) number)
+                        .multiply(BigDecimal.valueOf(register.scale()))
+                        .doubleValue();
+    }
+
+    private static double number(Register register, ByteBuffer data) {
         if (register.type().registers() == 1) {
             short bits = data.getShort();
             return register.type() == NumberType.INT16 ? bits : Short.toUnsignedInt(bits);

@@ -163,4 +163,28 @@ class ModbusRtuTest {
         assertThat(ModbusRtu.silenceNanos(9600, "8N1") / 1e6).isCloseTo(3.6458, within(1e-4));
         assertThat(ModbusRtu.silenceNanos(115_200, "8E1")).isEqualTo(1_750_000);
     }
+
+    @Test
+    void wholeNumbersAreScaledAsDecimals() {
+        assertThat(value(holding(0x6B, NumberType.INT16, 0.001), "11 03 02 07 D2"))
+                .isEqualTo(2.002);
+        assertThat(value(holding(0x6B, NumberType.UINT32, 1e-6), "11 03 04 FF FF FF FF"))
+                .isEqualTo(4294.967295);
+        assertThat(value(holding(0x6B, NumberType.INT16, -0.1), "11 03 02 00 03"))
+                .isEqualTo(-0.3);
+    }
+
+    /** Noise on the line: whatever comes, it is answered by one of the four kinds of reply. */
+    @Test
+    void noBytesAreTakenForAValueByChance() {
+        Register register = holding(0x6B, NumberType.FLOAT32, 1);
+        Noise noise = new Noise(7, 0);
+        for (int i = 0; i < 20_000; i++) {
+            byte[] bytes = new byte[(int) (noise.uniform() * 40)];
+            for (int k = 0; k < bytes.length; k++) {
+                bytes[k] = (byte) (noise.uniform() * 256);
+            }
+            assertThat(reply(register, bytes)).isInstanceOfAny(Poller.Unfinished.class, Poller.Garbled.class);
+        }
+    }
 }
