@@ -46,7 +46,8 @@ final class PollReader {
         boolean scpi = kind.equals("scpi");
         double period = above0("period", 1);
         double timeout = above0("timeout", scpi ? 2 : 0.5);
-        PollSpec.Asking asking = scpi ? new PollSpec.Scpi(queries(), terminator()) : new PollSpec.Modbus(registers());
+        PollSpec.Asking asking =
+                scpi ? new PollSpec.Scpi(queries(), terminator(), errors()) : new PollSpec.Modbus(registers());
         if (asked == null) {
             keys.mistake("kind", "[poll] does not say what is asked", "add a [poll.channels] with every channel");
         } else {
@@ -70,6 +71,10 @@ final class PollReader {
         return TERMINATORS.getOrDefault(name, "\n");
     }
 
+    private @Nullable String errors() {
+        return keys.has("errors") ? ScpiQuery.read(keys, "errors") : null;
+    }
+
     /** What is written for a channel; null, with a mistake, where nothing is. */
     private @Nullable Keys of(String channel) {
         if (asked == null) {
@@ -89,7 +94,7 @@ final class PollReader {
         for (String channel : channels) {
             Keys one = of(channel);
             if (one != null) {
-                queries.add(ScpiQuery.read(one));
+                queries.add(ScpiQuery.read(one, "query"));
                 one.done();
             }
         }

@@ -1,6 +1,7 @@
 package benchtrue.sheet;
 
 import java.util.List;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Instruments that answer only when they are asked, one question after the other.
@@ -18,8 +19,14 @@ public record PollSpec(double periodSeconds, double timeoutSeconds, Asking askin
     /** What is asked for each channel, in the order of the sheet. */
     public sealed interface Asking {}
 
-    /** @param terminator what ends a message, to the instrument and from it */
-    public record Scpi(List<String> queries, String terminator) implements Asking {
+    /**
+     * @param terminator what ends a message, to the instrument and from it
+     * @param errors asks an instrument that gave no answer for the next of its errors; null: it is not asked
+     */
+    public record Scpi(
+            List<String> queries,
+            String terminator,
+            @Nullable String errors) implements Asking {
         public Scpi {
             queries = List.copyOf(queries);
         }

@@ -23,30 +23,30 @@ final class ScpiQuery {
 
     private ScpiQuery() {}
 
-    /** What stands at {@code query}; a mistake where it may not be sent. */
-    static String read(Keys keys) {
-        String query = keys.needed("query", "\"READ?\", as the instrument's manual has it");
+    /** What stands at a key; a mistake where it may not be sent. */
+    static String read(Keys keys, String key) {
+        String query = keys.needed(key, "\"READ?\", as the instrument's manual has it");
         if (query.isEmpty()) {
             return query;
         }
         if (!PRINTABLE.matcher(query).matches()) {
-            keys.mistake("query", "a query has only printable ASCII characters", "leave the line end to terminator");
+            keys.mistake(key, "a query has only printable ASCII characters", "leave the line end to terminator");
         } else if (query.contains(";")) {
-            keys.mistake("query", "a message may hold one query only, so no \";\"", "give each channel its own query");
+            keys.mistake(key, "a message may hold one query only, so no \";\"", "give each channel its own query");
         } else if (!QUERY.matcher(query).matches()) {
             keys.mistake(
-                    "query",
+                    key,
                     "\"" + query + "\" is no query, and nothing else is sent",
                     "end its header in \"?\", and set the instrument up by hand");
         } else if (nodes(query).stream().anyMatch(ScpiQuery::acts)) {
             keys.mistake(
-                    "query",
+                    key,
                     "\"" + query + "\" makes the instrument calibrate or test itself, which is never asked for here",
                     "ask for a measured value, as READ? does");
         } else if (nodes(query).stream().anyMatch(node -> isShort(node, "MEASURE", 4))) {
             keys.sheet()
                     .notice(
-                            keys.place("query"),
+                            keys.place(key),
                             "\"" + query + "\" sets the instrument up anew each time it is asked",
                             "set it up by hand and ask with READ? or FETC? where it has them");
         }

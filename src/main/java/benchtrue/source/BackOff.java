@@ -17,6 +17,10 @@ final class BackOff {
         return wait;
     }
 
+    boolean hasFailed() {
+        return failures > 0;
+    }
+
     void answered() {
         failures = 0;
     }

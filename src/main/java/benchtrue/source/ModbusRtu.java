@@ -6,6 +6,7 @@ import benchtrue.sheet.PollSpec.Register;
 import java.nio.ByteBuffer;
 import java.util.Arrays;
 import java.util.List;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Reads registers over Modbus RTU and does nothing else (Modbus Application Protocol V1.1b3, 6.3 and 6.4; Modbus over Serial Line
@@ -67,6 +68,17 @@ final class ModbusRtu implements Poller {
     @Override
     public long silenceNanos() {
         return silenceNanos;
+    }
+
+    /** What is wrong comes as an exception at once. */
+    @Override
+    public byte @Nullable [] errorRequest() {
+        return null;
+    }
+
+    @Override
+    public Reply error(byte[] bytes, int length) {
+        throw new IllegalStateException("there is no question for errors");
     }
 
     @Override

@@ -27,6 +27,9 @@ final class PolledLine {
     private static final int CHUNK = 512;
     private static final int LONGEST = 2048;
 
+    /** An instrument keeps a few dozen at the most; one that reports without end is not waited for. */
+    private static final int MOST_ERRORS = 20;
+
     private final Poller poller;
     private final List<String> channels;
     private final long periodNanos;
@@ -38,6 +41,8 @@ final class PolledLine {
     private final byte[] answer = new byte[LONGEST];
     private final String patience;
     private final String[] told;
+    private int length;
+    private long stamp;
     private long lastByte;
     private long due;
 
@@ -139,13 +144,34 @@ final class PolledLine {
     }
 
     private void ask(int channel, Round round) throws IOException, InterruptedException {
+        if (backOff(channel).hasFailed() && !askForErrors(channel, round)) {
+            return;
+        }
+        Reply reply = exchange(poller.request(channel), (bytes, count) -> poller.reply(channel, bytes, count));
+        if (length > 0) {
+            round.came(channel, Arrays.copyOf(answer, length), stamp);
+        }
+        if (reply instanceof Value value) {
+            answered(channel, value.value(), "", round);
+        } else if (reply instanceof NoValue none) {
+            answered(channel, Double.NaN, none.why(), round);
+        } else {
+            failed(channel, reply, round);
+        }
+    }
+
+    /** What the bytes that have come so far say. */
+    private interface Meaning {
+        Reply of(byte[] bytes, int length);
+    }
+
+    /** Sends a question and waits for the answer, whose bytes are in {@code answer} then. */
+    private Reply exchange(byte[] request, Meaning meaning) throws IOException, InterruptedException {
         ticker.sleep(lastByte + poller.silenceNanos() - ticker.nanos());
         link.discard();
-        byte[] request = poller.request(channel);
         link.write(request, request.length);
         long asked = ticker.nanos();
-        long stamp = 0;
-        int length = 0;
+        length = 0;
         Reply reply = new Unfinished();
         while (reply instanceof Unfinished && ticker.nanos() - asked < timeoutNanos) {
             int count = Math.min(read(), LONGEST - length);
@@ -153,27 +179,27 @@ final class PolledLine {
                 stamp = length == 0 ? lastByte : stamp;
                 System.arraycopy(chunk, 0, answer, length, count);
                 length += count;
-                reply = poller.reply(channel, answer, length);
+                reply = meaning.of(answer, length);
             }
         }
-        if (length > 0) {
-            round.came(channel, Arrays.copyOf(answer, length), stamp);
-        }
-        settle(channel, reply, length, round);
+        return reply;
     }
 
-    private void settle(int channel, Reply reply, int length, Round round) {
-        if (reply instanceof Value value) {
-            answered(channel, value.value(), "", round);
-        } else if (reply instanceof NoValue none) {
-            answered(channel, Double.NaN, none.why(), round);
-        } else if (reply instanceof Garbled garbled) {
-            failed(channel, garbled.why(), round);
-        } else if (length == 0) {
-            failed(channel, "no answer" + patience, round);
-        } else {
-            failed(channel, "no whole answer" + patience + " (" + length + " bytes came)", round);
+    /** Takes the errors out of an instrument that gave no answer; false where it gives none now either. */
+    private boolean askForErrors(int channel, Round round) throws IOException, InterruptedException {
+        byte[] request = poller.errorRequest();
+        for (int i = 0; request != null && i < MOST_ERRORS; i++) {
+            Reply reply = exchange(request, poller::error);
+            if (reply instanceof Value) {
+                return true;
+            } else if (reply instanceof NoValue error) {
+                round.problems.add(channels.get(channel) + ": the instrument reports " + error.why());
+            } else {
+                failed(channel, reply, round);
+                return false;
+            }
         }
+        return true;
     }
 
     /** @param why there is no value; empty where there is one */
@@ -187,9 +213,16 @@ final class PolledLine {
         told[channel] = why;
     }
 
-    private void failed(int channel, String why, Round round) {
+    private void failed(int channel, Reply reply, Round round) {
         long wait = backOff(channel).failed(timeoutNanos, ticker.nanos());
-        round.problems.add(channels.get(channel) + ": " + why + "; asked again in " + seconds(wait));
+        round.problems.add(channels.get(channel) + ": " + why(reply) + "; asked again in " + seconds(wait));
+    }
+
+    private String why(Reply reply) {
+        if (reply instanceof Garbled garbled) {
+            return garbled.why();
+        }
+        return length == 0 ? "no answer" + patience : "no whole answer" + patience + " (" + length + " bytes came)";
     }
 
     private static String seconds(long nanos) {

@@ -2,6 +2,7 @@ package benchtrue.source;
 
 import benchtrue.sheet.LineSpec;
 import benchtrue.sheet.PollSpec;
+import org.jspecify.annotations.Nullable;
 
 /** The language of polled instruments: what to send for a channel, and what the bytes that came back mean. Knows no port and no clock. */
 interface Poller {
@@ -16,6 +17,12 @@ interface Poller {
 
     /** @param bytes what came since the request for the channel was sent, up to {@code length} */
     Reply reply(int channel, byte[] bytes, int length);
+
+    /** Asks an instrument that did not answer for the next of its errors; null where none can be asked. Read only. */
+    byte @Nullable [] errorRequest();
+
+    /** @return the error as a {@link NoValue}, and any {@link Value} where there is none left */
+    Reply error(byte[] bytes, int length);
 
     /** Which instrument has the channel: one that is silent does not keep the others waiting. */
     int instrument(int channel);

@@ -5,6 +5,7 @@ import java.nio.charset.StandardCharsets;
 import java.util.List;
 import java.util.Locale;
 import java.util.regex.Pattern;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Asks the sheet's queries, one in a message (IEEE 488.2-1992 for numbers and messages, SCPI-1999 volume 1, 7.2.1 for the numbers that
@@ -21,17 +22,40 @@ final class Scpi implements Poller {
     /** A value is some 16 characters long; what goes on and on is no answer. */
     private static final int LONGEST_ANSWER = 1024;
 
+    /** As {@code -113,"Undefined header"}; 0 where there is none (SCPI-1999 volume 2, 21.8). */
+    private static final Pattern NO_ERROR = Pattern.compile("[+-]?0+(,.*)?");
+
     private final List<String> queries;
+    private final @Nullable String errors;
     private final String terminator;
 
     Scpi(PollSpec.Scpi scpi) {
         queries = scpi.queries();
         terminator = scpi.terminator();
+        errors = scpi.errors();
     }
 
     @Override
     public byte[] request(int channel) {
-        return (queries.get(channel) + terminator).getBytes(StandardCharsets.US_ASCII);
+        return message(queries.get(channel));
+    }
+
+    private byte[] message(String query) {
+        return (query + terminator).getBytes(StandardCharsets.US_ASCII);
+    }
+
+    @Override
+    public byte @Nullable [] errorRequest() {
+        return errors == null ? null : message(errors);
+    }
+
+    @Override
+    public Reply error(byte[] bytes, int length) {
+        String line = line(bytes, length, String.valueOf(errors));
+        if (line == null) {
+            return unfinished(length);
+        }
+        return NO_ERROR.matcher(line).matches() ? new Value(0) : new NoValue(shown(line));
     }
 
     @Override
@@ -46,23 +70,33 @@ final class Scpi implements Poller {
 
     @Override
     public Reply reply(int channel, byte[] bytes, int length) {
+        String line = line(bytes, length, queries.get(channel));
+        return line == null ? unfinished(length) : answer(line);
+    }
+
+    private static Reply unfinished(int length) {
+        return length < LONGEST_ANSWER ? new Unfinished() : new Garbled("bytes without end, no answer");
+    }
+
+    /** The first whole line that says something; null: it is still to come. */
+    private @Nullable String line(byte[] bytes, int length, String query) {
         String text = new String(bytes, 0, length, StandardCharsets.ISO_8859_1);
         int from = 0;
         for (int end = text.indexOf(terminator); end >= 0; end = text.indexOf(terminator, from)) {
             String line = text.substring(from, end).strip();
             from = end + terminator.length();
             // An end that was left over from the answer before, or an instrument that echoes.
-            if (!line.isEmpty() && !line.equals(queries.get(channel))) {
-                return answer(line);
+            if (!line.isEmpty() && !line.equals(query)) {
+                return line;
             }
         }
-        return length < LONGEST_ANSWER ? new Unfinished() : new Garbled("bytes without end, no answer");
+        return null;
     }
 
     private static Reply answer(String line) {
         String text = line.toUpperCase(Locale.ROOT);
         if (!NUMBER.matcher(text).matches()) {
-            return new NoValue("it answers " + quoted(line) + ", which is not one number");
+            return new NoValue("it answers \"" + shown(line) + "\", which is not one number");
         }
         double number = Double.parseDouble(text);
         if (number == NOT_A_NUMBER) {
@@ -74,8 +108,9 @@ final class Scpi implements Poller {
         return Double.isInfinite(number) ? new NoValue("it answers a number beyond all bounds") : new Value(number);
     }
 
-    private static String quoted(String line) {
-        String shown = line.length() <= LONGEST_QUOTE ? line : line.substring(0, LONGEST_QUOTE) + "…";
-        return "\"" + shown.replaceAll("[^ -~…]", "?") + "\"";
+    /** What an instrument sends may do nothing to a terminal. */
+    private static String shown(String line) {
+        String start = line.length() <= LONGEST_QUOTE ? line : line.substring(0, LONGEST_QUOTE) + "…";
+        return start.replaceAll("[^ -~…]", "?");
     }
 }

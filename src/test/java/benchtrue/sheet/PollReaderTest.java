@@ -64,7 +64,8 @@ class PollReaderTest {
     @Test
     void queriesAreThoseOfTheSheetInTheOrderOfItsChannels() {
         assertThat(poll(SCPI))
-                .isEqualTo(new PollSpec(1, 2, new PollSpec.Scpi(List.of("SENS:CURR:DC:DATA?", "FETC? (@102)"), "\n")));
+                .isEqualTo(new PollSpec(
+                        1, 2, new PollSpec.Scpi(List.of("SENS:CURR:DC:DATA?", "FETC? (@102)"), "\n", null)));
         assertThat(poll(SCPI.replace("\"scpi\"", "\"scpi\"\nterminator = \"CRLF\""))
                         .asking())
                 .isInstanceOfSatisfying(
@@ -184,5 +185,17 @@ class PollReaderTest {
         assertThat(mistakes(SCPI, "[line]\nbaud = 9600\n", ""))
                 .containsExactly(
                         "rig.toml:7:1: [poll] needs a [line]; add one with baud and frame as the instrument has them");
+    }
+
+    @Test
+    void theQuestionForErrorsIsAQueryToo() {
+        assertThat(poll(SCPI.replace("\"scpi\"", "\"scpi\"\nerrors = \"SYST:ERR?\""))
+                        .asking())
+                .isInstanceOfSatisfying(
+                        PollSpec.Scpi.class, scpi -> assertThat(scpi.errors()).isEqualTo("SYST:ERR?"));
+        assertThat(mistakes(SCPI, "\"scpi\"", "\"scpi\"\nerrors = \"*CLS\""))
+                .containsExactly(
+                        "rig.toml:11:1: \"*CLS\" is no query, and nothing else is sent; end its header in \"?\","
+                                + " and set the instrument up by hand");
     }
 }

@@ -93,6 +93,16 @@ class InstrumentTest {
     }
 
     @Test
+    void scpiReportsWhatItDidNotUnderstand() {
+        PolledRig rig = new PolledRig(PolledRig.SCPI.replace("period", "errors = \"SYST:ERR?\"\nperiod"));
+        Instrument instrument = Instrument.of(rig.poll());
+        byte[] messages = "OUTP ON\nSYST:ERR?\nSYST:ERR?\n".getBytes(StandardCharsets.US_ASCII);
+        assertThat(instrument.answer(messages, messages.length, CELLS))
+                .asString(StandardCharsets.US_ASCII)
+                .isEqualTo("-113,\"Undefined header\"\n0,\"No error\"\n");
+    }
+
+    @Test
     void aCableIsCutFromTimeToTimeInTheMiddleOfALine() {
         Cable cable = new Cable(new CableFaults(10, 2, 0), 1);
         byte[] line = "1.5,2.5\r\n".getBytes(StandardCharsets.US_ASCII);

@@ -77,7 +77,7 @@ class PolledLineTest {
     }
 
     private PolledLine scpi() {
-        PollSpec spec = new PollSpec(1, 0.5, new PollSpec.Scpi(List.of("I?", "V?"), "\n"));
+        PollSpec spec = new PollSpec(1, 0.5, new PollSpec.Scpi(List.of("I?", "V?"), "\n", null));
         return new PolledLine(sheet, spec, Poller.of(spec, Sheets.line("8N1")), line, line);
     }
 
@@ -220,5 +220,45 @@ class PolledLineTest {
         line.gone = true;
         assertThatThrownBy(polled::next).isInstanceOf(IOException.class).hasMessage("the port is gone");
         assertThat(line.asked).hasSize(2);
+    }
+
+    private PolledLine scpiWithErrors() {
+        PollSpec spec = new PollSpec(1, 0.5, new PollSpec.Scpi(List.of("I?", "V?"), "\n", "SYST:ERR?"));
+        return new PolledLine(sheet, spec, Poller.of(spec, Sheets.line("8N1")), line, line);
+    }
+
+    @Test
+    void anInstrumentThatDidNotAnswerIsAskedWhyUntilItHasNoErrorLeft() throws Exception {
+        PolledLine polled = scpiWithErrors();
+        polled.next();
+        line.replies.addAll(List.of(
+                "-113,\"Undefined header\"\n", "-410,\"Query INTERRUPTED\"\n", "+0,\"No error\"\n", "1\n", "2\n"));
+        Polled round = polled.next();
+        assertThat(line.asked).containsExactly("I?\n", "SYST:ERR?\n", "SYST:ERR?\n", "SYST:ERR?\n", "I?\n", "V?\n");
+        assertThat(round.problems())
+                .containsExactly(
+                        "I: the instrument reports -113,\"Undefined header\"",
+                        "I: the instrument reports -410,\"Query INTERRUPTED\"");
+        assertThat(round.values()).containsExactly(1, 2);
+    }
+
+    @Test
+    void anInstrumentThatDoesNotSayWhyIsLeftAloneAgain() throws Exception {
+        PolledLine polled = scpiWithErrors();
+        polled.next();
+        Polled round = polled.next();
+        assertThat(line.asked).containsExactly("I?\n", "SYST:ERR?\n");
+        assertThat(round.problems()).containsExactly("I: no answer within 0.5 s; asked again in 1 s");
+    }
+
+    @Test
+    void anInstrumentThatReportsWithoutEndIsNotWaitedFor() throws Exception {
+        PolledLine polled = scpiWithErrors();
+        polled.next();
+        for (int i = 0; i < 20; i++) {
+            line.replies.add("-350,\"Queue overflow\"\n");
+        }
+        line.replies.addAll(List.of("1\n", "2\n"));
+        assertThat(polled.next().values()).containsExactly(1, 2);
     }
 }

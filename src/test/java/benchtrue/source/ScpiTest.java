@@ -11,7 +11,7 @@ import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
 
 class ScpiTest {
-    private final Scpi scpi = new Scpi(new PollSpec.Scpi(List.of("READ?", "SENS:TEMP?"), "\n"));
+    private final Scpi scpi = new Scpi(new PollSpec.Scpi(List.of("READ?", "SENS:TEMP?"), "\n", null));
 
     private Poller.Reply reply(String text) {
         byte[] bytes = text.getBytes(StandardCharsets.ISO_8859_1);
@@ -22,7 +22,8 @@ class ScpiTest {
     void aMessageIsOneQueryAndItsTerminator() {
         assertThat(new String(scpi.request(1), StandardCharsets.US_ASCII)).isEqualTo("SENS:TEMP?\n");
         assertThat(new String(
-                        new Scpi(new PollSpec.Scpi(List.of("READ?"), "\r\n")).request(0), StandardCharsets.US_ASCII))
+                        new Scpi(new PollSpec.Scpi(List.of("READ?"), "\r\n", null)).request(0),
+                        StandardCharsets.US_ASCII))
                 .isEqualTo("READ?\r\n");
     }
 
