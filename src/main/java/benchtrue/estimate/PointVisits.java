@@ -44,6 +44,11 @@ public final class PointVisits {
         return points.length;
     }
 
+    /** Whether the run has been at a point, by its place in the list. */
+    public boolean isVisited(int point) {
+        return visits[point] > 0;
+    }
+
     public int visited() {
         int visited = 0;
         for (int each : visits) {

@@ -25,6 +25,11 @@ public sealed interface Control extends Message {
     /** Compute the closing summary over what has been read so far and show it. */
     record Summarise() implements Control {}
 
+    /** Observe the channels from now on, for the set-up; until another one begins or it ends. */
+    record BeginSpell() implements Control {}
+
+    record EndSpell() implements Control {}
+
     /** End the run here. */
     record Close() implements Control {}
 }

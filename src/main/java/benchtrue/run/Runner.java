@@ -124,6 +124,8 @@ public final class Runner {
             closed = true;
         } else if (control instanceof Control.Summarise) {
             closing = session.engine().reading() == 0 ? null : summarise();
+        } else if (control instanceof Control.BeginSpell || control instanceof Control.EndSpell) {
+            views.observe(control instanceof Control.BeginSpell);
         } else if (!setup.live()) {
             drive(control);
         }

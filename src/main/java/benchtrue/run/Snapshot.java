@@ -18,6 +18,9 @@ import org.jspecify.annotations.Nullable;
  * @param advice what to vary next; null: nothing is left to wish for
  * @param next why the run should go on, a phrase for each reason; empty: it has enough
  * @param notices one line each, what the operator should know now: held, waiting for the reference, …
+ * @param points the planned operating points
+ * @param setUp what was recorded of the set-up so far, a line each
+ * @param spell what the channels did since it was asked for; null: nobody asks
  * @param closing the closing summary once the run ended or when it was asked for
  */
 public record Snapshot(
@@ -39,7 +42,33 @@ public record Snapshot(
         @Nullable AdviceView advice,
         List<String> notices,
         List<String> next,
+        List<PointView> points,
+        List<String> setUp,
+        @Nullable SpellView spell,
         @Nullable Closing closing) {
+
+    public record PointView(String text, boolean visited) {}
+
+    /** @param rate of readings in 1/s; NaN: not known */
+    public record SpellView(double seconds, double rate, List<ChannelSpell> channels) {}
+
+    /**
+     * @param u of the mean, widened for autocorrelation
+     * @param sd of a reading
+     * @param step smallest change between two readings; NaN: it never changed
+     * @param autocorrelation at lag 1
+     * @param change from the first to the last reading
+     */
+    public record ChannelSpell(
+            String name,
+            String unit,
+            long count,
+            double mean,
+            double u,
+            double sd,
+            double step,
+            double autocorrelation,
+            double change) {}
 
     /** Where the run stands. */
     public enum Phase {

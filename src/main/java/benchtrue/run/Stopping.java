@@ -7,8 +7,10 @@ import benchtrue.sheet.Channel;
 import benchtrue.sheet.Point;
 import benchtrue.sheet.RelationSpec;
 import benchtrue.sheet.UnknownSpec;
+import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.StringJoiner;
 
 /** Whether the run has enough, and what is missing. */
 final class Stopping {
@@ -49,6 +51,28 @@ final class Stopping {
     /** To be called after each reading. */
     void reading() {
         visits.at(engine.rows().observation().values);
+    }
+
+    /** The planned points and whether the run has been at each. */
+    List<Snapshot.PointView> points() {
+        BenchSheet sheet = engine.setup().sheet();
+        List<Snapshot.PointView> views = new ArrayList<>();
+        for (int i = 0; i < sheet.points().size(); i++) {
+            StringJoiner text = new StringJoiner(", ");
+            double[] set = sheet.points().get(i).set();
+            for (int j = 0; j < set.length; j++) {
+                if (!Double.isNaN(set[j])) {
+                    Channel channel = sheet.channels().get(j);
+                    String value =
+                            BigDecimal.valueOf(set[j]).stripTrailingZeros().toPlainString();
+                    text.add((channel.name() + " = " + value + " "
+                                    + channel.unit().symbol())
+                            .strip());
+                }
+            }
+            views.add(new Snapshot.PointView(text.toString(), visits.isVisited(i)));
+        }
+        return List.copyOf(views);
     }
 
     /** Why the run should go on, a phrase for each reason; empty: it may stop. */

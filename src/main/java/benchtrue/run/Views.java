@@ -23,6 +23,7 @@ final class Views {
     private final Recent[] trends;
     private final double[] lastSeen;
     private final double[] lastKept;
+    private @Nullable Spell spell;
 
     Views(Engine engine) {
         this.engine = engine;
@@ -43,6 +44,11 @@ final class Views {
         }
     }
 
+    /** @param begins whether a new spell begins, or the present one ends */
+    void observe(boolean begins) {
+        spell = begins ? new Spell(engine.setup().sheet()) : null;
+    }
+
     /** To be called after each reading. */
     void reading() {
         stopping.reading();
@@ -57,6 +63,9 @@ final class Views {
                     trends[i].add(value);
                 }
             }
+        }
+        if (spell != null) {
+            spell.add(time, observation.values);
         }
         for (int g = 0; g < groups.size(); g++) {
             groups.get(g).reading();
@@ -89,6 +98,9 @@ final class Views {
                 advising.advice(),
                 notices(),
                 stopping.whyNotYet(),
+                stopping.points(),
+                engine.acts().setUp(),
+                spell == null ? null : spell.view(),
                 closing);
     }
 

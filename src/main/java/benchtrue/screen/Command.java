@@ -26,6 +26,7 @@ enum Command {
     ADOPT('r', "adopt", "Adopt the present model as the reference, with name and reason.", When.RUNNING),
     SEGMENT('b', "segment", "Begin a new segment: before and after are not pooled.", When.RUNNING),
     SHELVE('z', "shelve", "Shelve the chosen alarm for a time, with a reason.", When.STANDING),
+    SET_UP('s', "set-up", "The checks before the run: warm-up, zero, sign, quiet minute, planned points.", When.LIVE),
     BELL('l', "bell", "Switch the bell of new alarms off or on.", When.ALWAYS);
 
     /** On what it depends whether a key works. */
@@ -34,6 +35,7 @@ enum Command {
         RUNNING,
         DRIVEN,
         REPLAY,
+        LIVE,
         READ,
         SEVERAL,
         WAITING,
@@ -69,6 +71,7 @@ enum Command {
             case RUNNING -> running;
             case DRIVEN -> running && !snapshot.live();
             case REPLAY -> !snapshot.live();
+            case LIVE -> running && snapshot.live();
             case READ -> snapshot.reading() > 0;
             case SEVERAL -> shown.unknowns().size() > 1;
             case WAITING -> snapshot.alarms().stream().anyMatch(a -> !a.acknowledged());

@@ -40,6 +40,12 @@ final class Footer {
 
     private static List<String[]> now(Shown shown) {
         List<String[]> keys = new ArrayList<>();
+        if (shown.look().setUp != null) {
+            return List.of(
+                    new String[] {"Enter", "do it, or accept it"},
+                    new String[] {"s", "skip, with a reason"},
+                    new String[] {"Esc", "close"});
+        }
         if (shown.look().page != null) {
             keys.add(new String[] {"Esc", "back"});
             keys.add(new String[] {"↑ ↓", "scroll"});

@@ -37,7 +37,8 @@ final class Frame {
         int footer = Footer.rows(shown);
         Footer.draw(canvas.part(0, canvas.height() - footer, canvas.width(), footer), shown);
         Canvas body = canvas.part(0, banner, canvas.width(), canvas.height() - banner - footer);
-        Page page = shown.look().page;
+        SetUp setUp = shown.look().setUp;
+        Page page = setUp == null ? shown.look().page : setUp.page(shown);
         if (page != null) {
             page(body, page);
         } else if (shown.look().opened) {

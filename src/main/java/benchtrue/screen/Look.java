@@ -28,6 +28,10 @@ final class Look {
     @Nullable
     Form form;
 
+    /** The checks before a live run; null: not open. */
+    @Nullable
+    SetUp setUp;
+
     boolean bell = true;
 
     private final Map<PaneKind, Integer> from = new EnumMap<>(PaneKind.class);

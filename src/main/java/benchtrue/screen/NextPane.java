@@ -40,6 +40,10 @@ final class NextPane implements Pane {
         if (snapshot.next().isEmpty() && snapshot.reading() > 0) {
             lines.add(Line.of("the run has enough: it may be closed", Style.STRONG));
         }
+        snapshot.points().stream()
+                .filter(p -> !p.visited())
+                .findFirst()
+                .ifPresent(p -> lines.addAll(Line.wrapped("planned next: " + p.text(), width, 2)));
         snapshot.next().forEach(reason -> lines.addAll(Line.wrapped("go on: " + reason, width, 2)));
         return lines;
     }

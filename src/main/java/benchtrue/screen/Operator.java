@@ -44,6 +44,7 @@ final class Operator {
             case AGAIN -> desk.send(new Control.Restart());
             case CLOSING -> desk.send(new Control.Summarise());
             case HOLD -> desk.send(snapshot.held() ? new Act.Release() : new Act.Hold());
+            case SET_UP -> look.setUp = new SetUp(desk, look);
             case CLOSE -> close(snapshot);
             case FREEZE -> {} // the display is the screen's own
             default -> ask(command, shown);

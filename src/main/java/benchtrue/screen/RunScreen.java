@@ -121,6 +121,9 @@ public final class RunScreen {
             }
         }
         newestAlarm = newest;
+        if (drawn == null && latest.live() && latest.setUp().isEmpty()) {
+            look.setUp = new SetUp(desk, look);
+        }
         Closing last = latest.closing();
         if (last != null && last != closing) {
             look.open(Page.of("Closing summary", closingText.apply(last)));
@@ -144,6 +147,8 @@ public final class RunScreen {
             }
         } else if (look.form != null) {
             answer(look.form, key);
+        } else if (look.setUp != null) {
+            look.setUp.take(key, shown);
         } else {
             if (key.isAltDown()) {
                 back(); // no Alt key is in use: this is Esc with the next key close behind

@@ -53,6 +53,9 @@ final class Views {
                 null,
                 List.of(),
                 List.of("no reference model adopted yet"),
+                List.of(),
+                List.of(),
+                null,
                 null);
     }
 
