@@ -46,8 +46,9 @@ final class PollReader {
         boolean scpi = kind.equals("scpi");
         double period = above0("period", 1);
         double timeout = above0("timeout", scpi ? 2 : 0.5);
-        PollSpec.Asking asking =
-                scpi ? new PollSpec.Scpi(queries(), terminator(), errors()) : new PollSpec.Modbus(registers());
+        PollSpec.Asking asking = scpi
+                ? new PollSpec.Scpi(queries(), terminator(), errors())
+                : new PollSpec.Modbus(registers(), keys.truth("single"));
         if (asked == null) {
             keys.mistake("kind", "[poll] does not say what is asked", "add a [poll.channels] with every channel");
         } else {

@@ -32,8 +32,12 @@ public record PollSpec(double periodSeconds, double timeoutSeconds, Asking askin
         }
     }
 
-    /** Over RTU frames. */
-    public record Modbus(List<Register> registers) implements Asking {
+    /**
+     * Over RTU frames.
+     *
+     * @param single every value is asked for by itself; else those whose registers follow each other are read at once
+     */
+    public record Modbus(List<Register> registers, boolean single) implements Asking {
         public Modbus {
             registers = List.copyOf(registers);
         }

@@ -5,6 +5,7 @@ import benchtrue.sheet.PollSpec;
 import benchtrue.sheet.PollSpec.Register;
 import java.nio.ByteBuffer;
 import java.util.Arrays;
+import java.util.Collections;
 import java.util.List;
 import org.jspecify.annotations.Nullable;
 
@@ -24,22 +25,22 @@ final class ModbusRtu implements Poller {
     private static final long FAST_SILENCE_NANOS = 1_750_000;
     private static final double SILENT_CHARACTERS = 3.5;
 
-    private final List<Register> registers;
+    private final List<RegisterBlock> blocks;
     private final byte[][] requests;
     private final long silenceNanos;
 
     ModbusRtu(PollSpec.Modbus modbus, LineSpec line) {
-        registers = modbus.registers();
-        requests = registers.stream().map(ModbusRtu::request).toArray(byte[][]::new);
+        blocks = RegisterBlock.of(modbus);
+        requests = blocks.stream().map(ModbusRtu::request).toArray(byte[][]::new);
         silenceNanos = silenceNanos(line.baud(), line.frame());
     }
 
-    private static byte[] request(Register register) {
+    private static byte[] request(RegisterBlock block) {
         byte[] frame = ByteBuffer.allocate(REQUEST)
-                .put((byte) register.address())
-                .put((byte) register.function())
-                .putShort((short) register.register())
-                .putShort((short) register.type().registers())
+                .put((byte) block.first().address())
+                .put((byte) block.first().function())
+                .putShort((short) block.first().register())
+                .putShort((short) block.count())
                 .array();
         Crc16.append(frame, REQUEST - CRC);
         return frame;
@@ -56,13 +57,25 @@ final class ModbusRtu implements Poller {
     }
 
     @Override
-    public byte[] request(int channel) {
-        return requests[channel];
+    public int questions() {
+        return requests.length;
     }
 
     @Override
-    public int instrument(int channel) {
-        return registers.get(channel).address();
+    public int[] channels(int question) {
+        return blocks.get(question).channels().stream()
+                .mapToInt(channel -> channel)
+                .toArray();
+    }
+
+    @Override
+    public byte[] request(int question) {
+        return requests[question];
+    }
+
+    @Override
+    public int instrument(int question) {
+        return blocks.get(question).first().address();
     }
 
     @Override
@@ -82,27 +95,28 @@ final class ModbusRtu implements Poller {
     }
 
     @Override
-    public Reply reply(int channel, byte[] bytes, int length) {
-        Register register = registers.get(channel);
-        Reply reply = answer(register, bytes, length);
-        if (reply instanceof Garbled && isEcho(channel, bytes, length)) {
-            return answer(register, Arrays.copyOfRange(bytes, REQUEST, length), length - REQUEST);
+    public Reply reply(int question, byte[] bytes, int length) {
+        RegisterBlock block = blocks.get(question);
+        Reply reply = answer(block, bytes, length);
+        if (reply instanceof Garbled && isEcho(question, bytes, length)) {
+            return answer(block, Arrays.copyOfRange(bytes, REQUEST, length), length - REQUEST);
         }
         return reply;
     }
 
     /** Adapters for two-wire lines often hand back what they have sent. */
-    private boolean isEcho(int channel, byte[] bytes, int length) {
-        return length >= REQUEST && Arrays.equals(bytes, 0, REQUEST, requests[channel], 0, REQUEST);
+    private boolean isEcho(int question, byte[] bytes, int length) {
+        return length >= REQUEST && Arrays.equals(bytes, 0, REQUEST, requests[question], 0, REQUEST);
     }
 
-    private static Reply answer(Register register, byte[] bytes, int length) {
+    private static Reply answer(RegisterBlock block, byte[] bytes, int length) {
         if (length < EXCEPTION) {
             return new Unfinished();
         }
+        Register first = block.first();
         int function = bytes[1] & 0xFF;
-        boolean exception = function == (register.function() | EXCEPTION_BIT);
-        int data = register.type().registers() * Short.BYTES;
+        boolean exception = function == (first.function() | EXCEPTION_BIT);
+        int data = block.count() * Short.BYTES;
         int whole = exception ? EXCEPTION : HEAD + data + CRC;
         if (length < whole) {
             // Up to the length of an echo it is not yet known whether this is one.
@@ -112,20 +126,22 @@ final class ModbusRtu implements Poller {
             return length < REQUEST ? new Unfinished() : new Garbled("a damaged answer (its check does not hold)");
         }
         int address = bytes[0] & 0xFF;
-        if (address != register.address()) {
+        if (address != first.address()) {
             return new Garbled("an answer of address " + address + ", which was not asked");
         }
         if (exception) {
-            return new NoValue(words(bytes[2] & 0xFF));
+            return new Answer(Collections.nCopies(block.values().size(), new NoValue(words(bytes[2] & 0xFF))));
         }
-        if (function != register.function() || (bytes[2] & 0xFF) != data) {
+        if (function != first.function() || (bytes[2] & 0xFF) != data) {
             return new Garbled("an answer to another question");
         }
-        return value(register, bytes);
+        ByteBuffer registers = ByteBuffer.wrap(bytes, HEAD, data);
+        return new Answer(
+                block.values().stream().map(value -> result(value, registers)).toList());
     }
 
-    private static Reply value(Register register, byte[] bytes) {
-        double value = RegisterValues.value(register, ByteBuffer.wrap(bytes, HEAD, bytes.length - HEAD));
+    private static Result result(Register register, ByteBuffer registers) {
+        double value = RegisterValues.value(register, registers);
         return Double.isFinite(value) ? new Value(value) : new NoValue("it answers no finite number");
     }
 

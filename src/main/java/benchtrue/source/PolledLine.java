@@ -3,18 +3,18 @@ package benchtrue.source;
 import benchtrue.sheet.BenchSheet;
 import benchtrue.sheet.Channel;
 import benchtrue.sheet.PollSpec;
+import benchtrue.source.Poller.Answer;
 import benchtrue.source.Poller.Garbled;
 import benchtrue.source.Poller.NoValue;
 import benchtrue.source.Poller.Reply;
 import benchtrue.source.Poller.Unfinished;
-import benchtrue.source.Poller.Value;
 import java.io.IOException;
-import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.stream.Collectors;
 
 /**
  * Asks the instruments on one line, a round of questions each period and one question at a time. An instrument without a
@@ -59,8 +59,8 @@ final class PolledLine {
         patience = " within " + seconds(timeoutNanos);
         due = ticker.nanos();
         lastByte = due;
-        for (int channel = 0; channel < channels.size(); channel++) {
-            backOffs.put(poller.instrument(channel), new BackOff());
+        for (int question = 0; question < poller.questions(); question++) {
+            backOffs.put(poller.instrument(question), new BackOff());
         }
     }
 
@@ -75,46 +75,18 @@ final class PolledLine {
         idle(ticker.nanos() + leastLeft());
         due = Math.max(due + periodNanos, ticker.nanos());
         Round round = new Round(channels.size());
-        for (int channel = 0; channel < channels.size(); channel++) {
-            if (backOff(channel).left(ticker.nanos()) <= 0) {
-                ask(channel, round);
+        for (int question = 0; question < poller.questions(); question++) {
+            if (backOff(question).left(ticker.nanos()) <= 0) {
+                ask(question, round);
             }
         }
         return round.done(ticker.nanos());
     }
 
-    /** What a round has given so far. */
-    private static final class Round {
-        private final double[] values;
-        private final long[] stamps;
-        private final byte[][] answers;
-        private final List<String> problems = new ArrayList<>();
-        private long first;
-        private boolean answered;
-
-        Round(int channels) {
-            values = new double[channels];
-            stamps = new long[channels];
-            answers = new byte[channels][0];
-            Arrays.fill(values, Double.NaN);
-        }
-
-        void came(int channel, byte[] bytes, long stamp) {
-            first = Arrays.stream(answers).allMatch(a -> a.length == 0) ? stamp : first;
-            answers[channel] = bytes;
-            stamps[channel] = stamp;
-        }
-
-        Polled done(long now) {
-            boolean came = Arrays.stream(answers).anyMatch(a -> a.length > 0);
-            return new Polled(came ? first : now, values, stamps, answers, problems, answered);
-        }
-    }
-
-    private BackOff backOff(int channel) {
-        BackOff backOff = backOffs.get(poller.instrument(channel));
+    private BackOff backOff(int question) {
+        BackOff backOff = backOffs.get(poller.instrument(question));
         if (backOff == null) {
-            throw new IllegalStateException("channel " + channel + " has no instrument");
+            throw new IllegalStateException("question " + question + " has no instrument");
         }
         return backOff;
     }
@@ -143,21 +115,31 @@ final class PolledLine {
         return count;
     }
 
-    private void ask(int channel, Round round) throws IOException, InterruptedException {
-        if (backOff(channel).hasFailed() && !askForErrors(channel, round)) {
+    private void ask(int question, Round round) throws IOException, InterruptedException {
+        if (backOff(question).hasFailed() && !askForErrors(question, round)) {
             return;
         }
-        Reply reply = exchange(poller.request(channel), (bytes, count) -> poller.reply(channel, bytes, count));
+        Reply reply = exchange(poller.request(question), (bytes, count) -> poller.reply(question, bytes, count));
         if (length > 0) {
-            round.came(channel, Arrays.copyOf(answer, length), stamp);
+            round.came(poller.channels(question), Arrays.copyOf(answer, length), stamp);
         }
-        if (reply instanceof Value value) {
-            answered(channel, value.value(), "", round);
-        } else if (reply instanceof NoValue none) {
-            answered(channel, Double.NaN, none.why(), round);
+        if (reply instanceof Answer sound) {
+            backOff(question).answered();
+            int[] asked = poller.channels(question);
+            for (int i = 0; i < asked.length; i++) {
+                tell(asked[i], round.result(asked[i], sound.results().get(i)), round);
+            }
         } else {
-            failed(channel, reply, round);
+            failed(question, reply, round);
         }
+    }
+
+    /** Of what lasts, only the beginning is told. */
+    private void tell(int channel, String why, Round round) {
+        if (!why.isEmpty() && !why.equals(told[channel])) {
+            round.problem(channels.get(channel) + ": " + why);
+        }
+        told[channel] = why;
     }
 
     /** What the bytes that have come so far say. */
@@ -186,36 +168,29 @@ final class PolledLine {
     }
 
     /** Takes the errors out of an instrument that gave no answer; false where it gives none now either. */
-    private boolean askForErrors(int channel, Round round) throws IOException, InterruptedException {
+    private boolean askForErrors(int question, Round round) throws IOException, InterruptedException {
         byte[] request = poller.errorRequest();
         for (int i = 0; request != null && i < MOST_ERRORS; i++) {
             Reply reply = exchange(request, poller::error);
-            if (reply instanceof Value) {
-                return true;
-            } else if (reply instanceof NoValue error) {
-                round.problems.add(channels.get(channel) + ": the instrument reports " + error.why());
-            } else {
-                failed(channel, reply, round);
+            if (!(reply instanceof Answer sound)) {
+                failed(question, reply, round);
                 return false;
             }
+            if (!(sound.results().get(0) instanceof NoValue error)) {
+                return true;
+            }
+            round.problem(names(question) + ": the instrument reports " + error.why());
         }
         return true;
     }
 
-    /** @param why there is no value; empty where there is one */
-    private void answered(int channel, double value, String why, Round round) {
-        backOff(channel).answered();
-        round.answered = true;
-        round.values[channel] = value;
-        if (!why.isEmpty() && !why.equals(told[channel])) {
-            round.problems.add(channels.get(channel) + ": " + why);
-        }
-        told[channel] = why;
+    private void failed(int question, Reply reply, Round round) {
+        long wait = backOff(question).failed(timeoutNanos, ticker.nanos());
+        round.problem(names(question) + ": " + why(reply) + "; asked again in " + seconds(wait));
     }
 
-    private void failed(int channel, Reply reply, Round round) {
-        long wait = backOff(channel).failed(timeoutNanos, ticker.nanos());
-        round.problems.add(channels.get(channel) + ": " + why(reply) + "; asked again in " + seconds(wait));
+    private String names(int question) {
+        return Arrays.stream(poller.channels(question)).mapToObj(channels::get).collect(Collectors.joining(", "));
     }
 
     private String why(Reply reply) {

@@ -2,6 +2,7 @@ package benchtrue.source;
 
 import benchtrue.sheet.LineSpec;
 import benchtrue.sheet.PollSpec;
+import java.util.List;
 import org.jspecify.annotations.Nullable;
 
 /** The language of polled instruments: what to send for a channel, and what the bytes that came back mean. Knows no port and no clock. */
@@ -12,11 +13,17 @@ interface Poller {
                 : new Scpi((PollSpec.Scpi) spec.asking());
     }
 
-    /** The message that asks for a channel; it is never anything but a question. Read only. */
-    byte[] request(int channel);
+    /** How many questions a round has. */
+    int questions();
 
-    /** @param bytes what came since the request for the channel was sent, up to {@code length} */
-    Reply reply(int channel, byte[] bytes, int length);
+    /** The channels that a question asks for; each channel is asked for in one question. Read only. */
+    int[] channels(int question);
+
+    /** The message; it is never anything but a question. Read only. */
+    byte[] request(int question);
+
+    /** @param bytes what came since the question was sent, up to {@code length} */
+    Reply reply(int question, byte[] bytes, int length);
 
     /** Asks an instrument that did not answer for the next of its errors; null where none can be asked. Read only. */
     byte @Nullable [] errorRequest();
@@ -24,8 +31,8 @@ interface Poller {
     /** @return the error as a {@link NoValue}, and any {@link Value} where there is none left */
     Reply error(byte[] bytes, int length);
 
-    /** Which instrument has the channel: one that is silent does not keep the others waiting. */
-    int instrument(int channel);
+    /** Which instrument is asked: one that is silent does not keep the others waiting. */
+    int instrument(int question);
 
     /** How long the line must have been quiet before a message. */
     long silenceNanos();
@@ -36,11 +43,21 @@ interface Poller {
     /** More is to come. */
     record Unfinished() implements Reply {}
 
-    record Value(double value) implements Reply {}
-
-    /** The instrument answered in good order, but has no value. */
-    record NoValue(String why) implements Reply {}
-
     /** What came is no answer to the question. */
     record Garbled(String why) implements Reply {}
+
+    /** The instrument answered in good order: one result for each channel of the question. */
+    record Answer(List<Result> results) implements Reply {
+        static Answer of(Result only) {
+            return new Answer(List.of(only));
+        }
+    }
+
+    /** What an answer says of a channel. */
+    sealed interface Result {}
+
+    record Value(double value) implements Result {}
+
+    /** There is no value now, as with an overload. */
+    record NoValue(String why) implements Result {}
 }

@@ -36,8 +36,18 @@ final class Scpi implements Poller {
     }
 
     @Override
-    public byte[] request(int channel) {
-        return message(queries.get(channel));
+    public int questions() {
+        return queries.size();
+    }
+
+    @Override
+    public int[] channels(int question) {
+        return new int[] {question};
+    }
+
+    @Override
+    public byte[] request(int question) {
+        return message(queries.get(question));
     }
 
     private byte[] message(String query) {
@@ -55,11 +65,11 @@ final class Scpi implements Poller {
         if (line == null) {
             return unfinished(length);
         }
-        return NO_ERROR.matcher(line).matches() ? new Value(0) : new NoValue(shown(line));
+        return Answer.of(NO_ERROR.matcher(line).matches() ? new Value(0) : new NoValue(shown(line)));
     }
 
     @Override
-    public int instrument(int channel) {
+    public int instrument(int question) {
         return 0;
     }
 
@@ -69,9 +79,9 @@ final class Scpi implements Poller {
     }
 
     @Override
-    public Reply reply(int channel, byte[] bytes, int length) {
-        String line = line(bytes, length, queries.get(channel));
-        return line == null ? unfinished(length) : answer(line);
+    public Reply reply(int question, byte[] bytes, int length) {
+        String line = line(bytes, length, queries.get(question));
+        return line == null ? unfinished(length) : Answer.of(result(line));
     }
 
     private static Reply unfinished(int length) {
@@ -93,7 +103,7 @@ final class Scpi implements Poller {
         return null;
     }
 
-    private static Reply answer(String line) {
+    private static Result result(String line) {
         String text = line.toUpperCase(Locale.ROOT);
         if (!NUMBER.matcher(text).matches()) {
             return new NoValue("it answers \"" + shown(line) + "\", which is not one number");

@@ -79,9 +79,11 @@ class PollReaderTest {
                 .isEqualTo(new PollSpec(
                         0.5,
                         2,
-                        new PollSpec.Modbus(List.of(
-                                new Register(1, 3, 107, NumberType.INT16, "ABCD", 0.01),
-                                new Register(247, 4, 8, NumberType.FLOAT32, "CDAB", 1)))));
+                        new PollSpec.Modbus(
+                                List.of(
+                                        new Register(1, 3, 107, NumberType.INT16, "ABCD", 0.01),
+                                        new Register(247, 4, 8, NumberType.FLOAT32, "CDAB", 1)),
+                                false)));
     }
 
     @Test

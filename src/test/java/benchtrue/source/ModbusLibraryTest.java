@@ -81,6 +81,30 @@ class ModbusLibraryTest {
     }
 
     @Test
+    void aBlockOfALibrarysServerIsReadAtOnce() throws Exception {
+        PolledRig block = new PolledRig(PolledRig.BLOCK);
+        ProcessImage one = new ProcessImage();
+        byte[] bytes = ByteBuffer.allocate(4).putFloat(1.5f).array();
+        one.with(t -> t.writeHoldingRegisters(r -> {
+            r.put(107, new byte[] {0, 42});
+            r.put(108, new byte[] {bytes[0], bytes[1]});
+            r.put(109, new byte[] {bytes[2], bytes[3]});
+        }));
+        try (TerminalPair pair = new TerminalPair(folder)) {
+            ModbusRtuServer server = server(pair.far(), Map.of(1, one));
+            server.start();
+            try (PortLink link = PortLink.open(pair.near(), block.line())) {
+                Polled polled = block.over(link).next();
+                assertThat(polled.problems()).isEmpty();
+                assertThat(polled.values()).containsExactly(0.42, 1.5);
+                assertThat(polled.stamps()[0]).isEqualTo(polled.stamps()[1]);
+            } finally {
+                server.stop();
+            }
+        }
+    }
+
+    @Test
     void aLibrarysClientReadsTheSimulatedRigAndCannotWriteToIt() throws Exception {
         try (TerminalPair pair = new TerminalPair(folder)) {
             CompletableFuture<Long> answers = rig.answering(pair.far(), 1, CableFaults.NONE);

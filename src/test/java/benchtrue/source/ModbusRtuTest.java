@@ -10,6 +10,7 @@ import java.nio.charset.StandardCharsets;
 import java.util.Arrays;
 import java.util.HexFormat;
 import java.util.List;
+import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -19,7 +20,7 @@ class ModbusRtuTest {
     private static final HexFormat HEX = HexFormat.ofDelimiter(" ");
 
     private static ModbusRtu modbus(Register register) {
-        return new ModbusRtu(new PollSpec.Modbus(List.of(register)), Sheets.line("8E1"));
+        return new ModbusRtu(new PollSpec.Modbus(List.of(register), false), Sheets.line("8E1"));
     }
 
     private static Register holding(int register, NumberType type, double scale) {
@@ -38,8 +39,12 @@ class ModbusRtuTest {
         return modbus(register).reply(0, bytes, bytes.length);
     }
 
+    private static Poller.Result result(Register register, byte[] bytes) {
+        return ((Poller.Answer) reply(register, bytes)).results().get(0);
+    }
+
     private static double value(Register register, String hex) {
-        return ((Poller.Value) reply(register, frame(hex))).value();
+        return ((Poller.Value) result(register, frame(hex))).value();
     }
 
     /** The catalogue of parametrised CRC algorithms (reveng.sourceforge.io) gives this check of CRC-16/MODBUS over 123456789. */
@@ -105,9 +110,9 @@ class ModbusRtuTest {
     @Test
     void anExceptionIsSaidInWords() {
         Register register = holding(0x6B, NumberType.FLOAT32, 1);
-        assertThat(reply(register, frame("11 83 02")))
+        assertThat(result(register, frame("11 83 02")))
                 .isEqualTo(new Poller.NoValue("it has no such register (exception 2)"));
-        assertThat(reply(register, frame("11 83 06"))).isEqualTo(new Poller.NoValue("it is busy (exception 6)"));
+        assertThat(result(register, frame("11 83 06"))).isEqualTo(new Poller.NoValue("it is busy (exception 6)"));
     }
 
     @Test
@@ -117,7 +122,7 @@ class ModbusRtuTest {
         for (int length = 0; length < whole.length; length++) {
             assertThat(modbus(register).reply(0, whole, length)).isInstanceOf(Poller.Unfinished.class);
         }
-        assertThat(reply(register, whole)).isInstanceOf(Poller.Value.class);
+        assertThat(reply(register, whole)).isInstanceOf(Poller.Answer.class);
     }
 
     @Test
@@ -137,7 +142,7 @@ class ModbusRtuTest {
         assertThat(reply(register, frame("12 03 04 3F 9D F3 B6")))
                 .isEqualTo(new Poller.Garbled("an answer of address 18, which was not asked"));
         assertThat(reply(register, frame("11 04 04 3F 9D F3 B6"))).isInstanceOf(Poller.Garbled.class);
-        assertThat(reply(register, frame("11 03 04 7F C0 00 00"))).isInstanceOf(Poller.NoValue.class);
+        assertThat(result(register, frame("11 03 04 7F C0 00 00"))).isInstanceOf(Poller.NoValue.class);
     }
 
     @Test
@@ -151,7 +156,7 @@ class ModbusRtuTest {
             for (int length = 0; length < both.length; length++) {
                 assertThat(modbus(register).reply(0, both, length)).isInstanceOf(Poller.Unfinished.class);
             }
-            assertThat(reply(register, both)).isInstanceOf(Poller.Value.class);
+            assertThat(reply(register, both)).isInstanceOf(Poller.Answer.class);
         }
     }
 
@@ -186,5 +191,34 @@ class ModbusRtuTest {
             }
             assertThat(reply(register, bytes)).isInstanceOfAny(Poller.Unfinished.class, Poller.Garbled.class);
         }
+    }
+
+    private static List<List<Integer>> questions(boolean single, Register... registers) {
+        ModbusRtu modbus = new ModbusRtu(new PollSpec.Modbus(List.of(registers), single), Sheets.line("8E1"));
+        return IntStream.range(0, modbus.questions())
+                .mapToObj(q -> Arrays.stream(modbus.channels(q)).boxed().toList())
+                .toList();
+    }
+
+    @Test
+    void onlyValuesWithoutAGapBetweenThemShareAQuestion() {
+        Register zero = holding(0, NumberType.FLOAT32, 1);
+        Register two = holding(2, NumberType.INT16, 1);
+        Register four = holding(4, NumberType.INT16, 1);
+        Register elsewhere = new Register(18, 3, 3, NumberType.INT16, "ABCD", 1);
+        Register input = new Register(17, 4, 3, NumberType.INT16, "ABCD", 1);
+        assertThat(questions(false, two, elsewhere, four, zero, input))
+                .containsExactly(List.of(3, 0), List.of(1), List.of(2), List.of(4));
+        assertThat(questions(false, two, two)).as("twice the same").containsExactly(List.of(0), List.of(1));
+        assertThat(questions(true, two, zero)).containsExactly(List.of(0), List.of(1));
+    }
+
+    /** V1.1b3, 6.3: 1 to 125 registers. */
+    @Test
+    void noQuestionAsksForMoreThanTheSpecificationAllows() {
+        Register[] many = IntStream.range(0, 126)
+                .mapToObj(i -> holding(i, NumberType.INT16, 1))
+                .toArray(Register[]::new);
+        assertThat(questions(false, many)).extracting(List::size).containsExactly(125, 1);
     }
 }

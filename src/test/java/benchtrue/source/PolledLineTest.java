@@ -84,7 +84,7 @@ class PolledLineTest {
     private PolledLine modbus() {
         Register one = new Register(1, 3, 0, NumberType.INT16, "ABCD", 1);
         Register two = new Register(2, 3, 0, NumberType.INT16, "ABCD", 1);
-        PollSpec spec = new PollSpec(0.1, 0.5, new PollSpec.Modbus(List.of(one, two)));
+        PollSpec spec = new PollSpec(0.1, 0.5, new PollSpec.Modbus(List.of(one, two), false));
         return new PolledLine(sheet, spec, Poller.of(spec, Sheets.line("8N1")), line, line);
     }
 
@@ -260,5 +260,25 @@ class PolledLineTest {
         }
         line.replies.addAll(List.of("1\n", "2\n"));
         assertThat(polled.next().values()).containsExactly(1, 2);
+    }
+
+    @Test
+    void valuesThatFollowEachOtherAreReadAtOnce() throws Exception {
+        Register current = new Register(1, 3, 12, NumberType.INT16, "ABCD", 1);
+        Register voltage = new Register(1, 3, 10, NumberType.FLOAT32, "ABCD", 1);
+        PollSpec spec = new PollSpec(0.1, 0.5, new PollSpec.Modbus(List.of(current, voltage), false));
+        PolledLine polled = new PolledLine(sheet, spec, Poller.of(spec, Sheets.line("8N1")), line, line);
+        line.replies.add(frame(1, 3, 6, 0x3F, 0x80, 0, 0, 0, 7));
+        Polled round = polled.next();
+        assertThat(line.asked).containsExactly(frame(1, 3, 0, 10, 0, 3));
+        assertThat(round.values()).containsExactly(7, 1);
+        assertThat(round.stamps()[0]).isEqualTo(round.stamps()[1]);
+        assertThat(round.answers()[0]).hasSize(11);
+        assertThat(round.answers()[1]).isEmpty();
+        line.replies.add(frame(1, 3, 6, 0x7F, 0xC0, 0, 0, 0, 7));
+        Polled half = polled.next();
+        assertThat(half.values()).containsExactly(7, Double.NaN);
+        assertThat(half.problems()).containsExactly("V: it answers no finite number");
+        assertThat(polled.next().problems()).containsExactly("V, I: no answer within 0.5 s; asked again in 0.5 s");
     }
 }

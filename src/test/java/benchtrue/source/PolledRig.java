@@ -36,6 +36,17 @@ final class PolledRig {
             V = { address = 17, function = 4, register = 8, type = "float32", order = "CDAB" }
             """;
 
+    /** Both values in one instrument, one behind the other. */
+    static final String BLOCK = """
+            [poll]
+            kind = "modbus"
+            period = 0.02
+            timeout = 0.4
+            [poll.channels]
+            I = { address = 1, register = 107, type = "int16", scale = 0.01 }
+            V = { address = 1, register = 108, type = "float32" }
+            """;
+
     private final BenchSheet sheet;
 
     /** @param poll the sheet's [poll] */

@@ -5,6 +5,7 @@ import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
 import java.io.IOException;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.concurrent.CompletableFuture;
 import java.util.concurrent.CompletionException;
@@ -26,7 +27,7 @@ class PolledTerminalTest {
     Path folder;
 
     @ParameterizedTest
-    @ValueSource(strings = {PolledRig.SCPI, PolledRig.MODBUS})
+    @ValueSource(strings = {PolledRig.SCPI, PolledRig.MODBUS, PolledRig.BLOCK})
     void theRigAnswersWithWhatItIndicatesAtTheTime(String poll) throws Exception {
         PolledRig rig = new PolledRig(poll);
         try (TerminalPair pair = new TerminalPair(folder);
@@ -145,6 +146,35 @@ class PolledTerminalTest {
                 line.next();
             }
             assertThat(answers.join()).as("questions in 2 s").isBetween(50L, 204L);
+        }
+    }
+
+    @Test
+    void aFloodIsNoAnswerAndDoesNoHarm() throws Exception {
+        PolledRig rig = new PolledRig(PolledRig.SCPI);
+        byte[] flood = "\33[2J\0\377".repeat(20_000).getBytes(StandardCharsets.ISO_8859_1);
+        try (TerminalPair pair = new TerminalPair(folder);
+                PortLink link = PortLink.open(pair.near(), rig.line())) {
+            PolledLine line = rig.over(link);
+            PortLink far = PortLink.open(pair.far(), rig.line());
+            CompletableFuture<Void> flooding = CompletableFuture.runAsync(() -> {
+                try {
+                    far.write(flood, flood.length);
+                } catch (IOException e) {
+                    throw new CompletionException(e);
+                }
+            });
+            Polled during = line.next();
+            assertThat(during.answered()).isFalse();
+            assertThat(during.problems()).containsExactly("I: bytes without end, no answer; asked again in 0.4 s");
+            while (!flooding.isDone()) {
+                line.next();
+            }
+            far.close();
+            CompletableFuture<Long> answers = rig.answering(pair.far(), 1, CableFaults.NONE);
+            assertThat(awaited(line).problems()).isEmpty();
+            pair.pull();
+            assertThatThrownBy(answers::join).isInstanceOf(CompletionException.class);
         }
     }
 }

@@ -13,9 +13,11 @@ import org.junit.jupiter.params.provider.ValueSource;
 class ScpiTest {
     private final Scpi scpi = new Scpi(new PollSpec.Scpi(List.of("READ?", "SENS:TEMP?"), "\n", null));
 
-    private Poller.Reply reply(String text) {
+    /** What is said of the channel; the reply itself where it is no answer. */
+    private Object reply(String text) {
         byte[] bytes = text.getBytes(StandardCharsets.ISO_8859_1);
-        return scpi.reply(0, bytes, bytes.length);
+        Poller.Reply reply = scpi.reply(0, bytes, bytes.length);
+        return reply instanceof Poller.Answer answer ? answer.results().get(0) : reply;
     }
 
     @Test
