@@ -19,6 +19,10 @@ final class PortLink implements SerialLink, Closeable {
     private static final int GONE = 2;
     private static final int BUSY = 11;
     private static final int FORBIDDEN = 13;
+    private static final int REFUSED = 22;
+
+    /** Any other is refused when such a terminal is opened for the second time. */
+    private static final String FRAME_OF_PSEUDO_TERMINALS = "8N1";
 
     private static final long TAKEN_MILLIS = 250;
 
@@ -47,17 +51,22 @@ final class PortLink implements SerialLink, Closeable {
     static PortLink open(String port, LineSpec line) throws IOException {
         SerialLibrary.load();
         SerialPort serial = found(port);
-        boolean known = set(serial, line);
+        String frame = isPseudoTerminal(port) ? FRAME_OF_PSEUDO_TERMINALS : line.frame();
+        boolean known = set(serial, line.baud(), frame);
         if (!serial.openPort()) {
-            throw new IOException(words(serial.getLastErrorCode()));
+            int code = serial.getLastErrorCode();
+            throw new IOException(code == REFUSED ? refused(line) : words(code));
         }
         // Only for an open port the library says whether it took the settings.
-        boolean taken = known && set(serial, line);
-        if (!taken && !isPseudoTerminal(port)) {
+        if (!known || !set(serial, line.baud(), frame)) {
             serial.closePort();
-            throw new IOException("it does not take " + line.baud() + " baud " + line.frame());
+            throw new IOException(refused(line));
         }
         return new PortLink(serial);
+    }
+
+    private static String refused(LineSpec line) {
+        return "it does not take " + line.baud() + " baud " + line.frame();
     }
 
     private static SerialPort found(String port) throws IOException {
@@ -68,16 +77,16 @@ final class PortLink implements SerialLink, Closeable {
         }
     }
 
-    private static boolean set(SerialPort serial, LineSpec line) {
-        int dataBits = line.frame().charAt(0) - '0';
-        int parity = switch (line.frame().charAt(1)) {
+    private static boolean set(SerialPort serial, int baud, String frame) {
+        int dataBits = frame.charAt(0) - '0';
+        int parity = switch (frame.charAt(1)) {
             case 'E' -> SerialPort.EVEN_PARITY;
             case 'O' -> SerialPort.ODD_PARITY;
             default -> SerialPort.NO_PARITY;
         };
-        int stopBits = line.frame().endsWith("2") ? SerialPort.TWO_STOP_BITS : SerialPort.ONE_STOP_BIT;
+        int stopBits = frame.endsWith("2") ? SerialPort.TWO_STOP_BITS : SerialPort.ONE_STOP_BIT;
         int waits = SerialPort.TIMEOUT_READ_SEMI_BLOCKING | SerialPort.TIMEOUT_WRITE_BLOCKING;
-        return serial.setComPortParameters(line.baud(), dataBits, stopBits, parity)
+        return serial.setComPortParameters(baud, dataBits, stopBits, parity)
                 && serial.setComPortTimeouts(waits, WAIT_MILLIS, 0);
     }
 

@@ -8,6 +8,7 @@ import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.List;
 import java.util.concurrent.CompletableFuture;
 import java.util.concurrent.TimeUnit;
 import org.junit.jupiter.api.Tag;
@@ -42,6 +43,20 @@ class PortLinkTest {
             assertThat(text(far.read(buffer))).isEqualTo("\0\3\r\n\21\23\377");
             send(far, "1.5\r\n");
             assertThat(text(near.read(buffer))).isEqualTo("1.5\r\n");
+        }
+    }
+
+    @Test
+    void whatHasComeCanBeThrownAway() throws IOException {
+        try (TerminalPair pair = new TerminalPair(folder);
+                PortLink near = PortLink.open(pair.near(), LINE);
+                PortLink far = PortLink.open(pair.far(), LINE)) {
+            send(far, "old");
+            assertThat(near.read(new byte[1])).isEqualTo(1);
+            near.discard();
+            assertThat(near.read(buffer)).isZero();
+            send(far, "new");
+            assertThat(text(near.read(buffer))).isEqualTo("new");
         }
     }
 
@@ -109,12 +124,15 @@ class PortLinkTest {
     }
 
     @Test
-    void aPseudoTerminalTakesAnyFrame() throws IOException {
+    void aPseudoTerminalTakesAnyFrameAsOftenAsItIsOpened() throws IOException {
         try (TerminalPair pair = new TerminalPair(folder);
-                PortLink near = PortLink.open(pair.near(), Sheets.line("7E1"));
                 PortLink far = PortLink.open(pair.far(), Sheets.line("7E1"))) {
-            send(far, "1.5");
-            assertThat(text(near.read(buffer))).isEqualTo("1.5");
+            for (String text : List.of("1.5", "2.5", "3.5")) {
+                try (PortLink near = PortLink.open(pair.near(), Sheets.line("7E1"))) {
+                    send(far, text);
+                    assertThat(text(near.read(buffer))).isEqualTo(text);
+                }
+            }
         }
         assertThat(PortLink.isPseudoTerminal("/dev/null")).isFalse();
         assertThat(PortLink.isPseudoTerminal(folder.resolve("none").toString())).isFalse();
