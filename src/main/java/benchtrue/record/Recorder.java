@@ -3,6 +3,7 @@ package benchtrue.record;
 import benchtrue.sheet.BenchSheet;
 import benchtrue.sheet.Channel;
 import benchtrue.source.Failure;
+import benchtrue.source.RawBytes;
 import benchtrue.source.Recording;
 import com.fasterxml.jackson.core.io.NumberOutput;
 import java.io.Closeable;

@@ -8,7 +8,7 @@ import org.jspecify.annotations.Nullable;
  *
  * @param port null: to be given when the run starts
  * @param frame data bits, parity and stop bits, as "8N1"
- * @param separator between the fields of a line, which are the channels in the order of the sheet
+ * @param separator between the fields of a line, ; a blank stands for any number of blanks and tabs
  * @param decimalComma whether numbers have a decimal comma; then a quoted cell of readings.csv may have one too
  * @param words what a status word of the instrument means, from meaning to word, as stable → "steady"
  */
@@ -18,7 +18,8 @@ public record LineSpec(
         String frame,
         String separator,
         boolean decimalComma,
-        Map<String, String> words) {
+        Map<String, String> words,
+        Dialect dialect) {
     public LineSpec {
         words = Map.copyOf(words);
     }

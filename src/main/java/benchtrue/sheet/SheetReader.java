@@ -100,7 +100,8 @@ public final class SheetReader {
                 rest.reference(groups),
                 rest.alarms(),
                 rest.rule(),
-                LineReader.read(keys),
+                LineReader.read(
+                        keys, channels.channels().stream().map(Channel::name).toList()),
                 PollReader.read(keys, channels.channels()),
                 RehearsalReader.read(keys, channels, relations),
                 sha256);

@@ -3,7 +3,7 @@ package benchtrue.source;
 /** Takes what a line was split into. */
 interface FrameSink {
     /**
-     * @param bytes filled again afterwards
+     * @param bytes from 0 with the mark of its start, if it has one; filled again afterwards
      * @param from first byte of the text
      * @param to behind its last byte
      * @param end behind the last byte of its end, at least {@code to}

@@ -2,13 +2,10 @@ package benchtrue.source;
 
 import benchtrue.sheet.LineSpec;
 import java.io.IOException;
-import java.nio.charset.StandardCharsets;
 import java.util.concurrent.TimeUnit;
 
 /** Plays the lines of the simulated rig out to a port, each when it is due. */
 public final class LinePlayer {
-    private static final String END = "\r\n";
-
     private static final double NANOS = 1e9;
 
     private LinePlayer() {}
@@ -35,8 +32,7 @@ public final class LinePlayer {
             long count = 0;
             while (lines.next()) {
                 TimeUnit.NANOSECONDS.sleep(start + (long) (lines.seconds() / pace * NANOS) - System.nanoTime());
-                byte[] bytes = cable.carry(
-                        (lines.text() + END).getBytes(StandardCharsets.UTF_8), (System.nanoTime() - start) / NANOS);
+                byte[] bytes = cable.carry(lines.bytes(), (System.nanoTime() - start) / NANOS);
                 if (bytes.length > 0) {
                     link.write(bytes, bytes.length);
                 }

@@ -1,13 +1,14 @@
 package benchtrue.source;
 
 import benchtrue.sheet.BenchSheet;
+import benchtrue.sheet.Dialect;
 import benchtrue.sheet.LineSpec;
 import benchtrue.sheet.Rehearsal;
 import java.util.Map;
 
 /** The lines of the simulated rig with the times at which they are due: those that {@link Rehearsing} writes to raw.log. */
 public final class RehearsedLines {
-    private static final LineSpec PLAIN = new LineSpec(null, 9600, "8N1", ",", false, Map.of());
+    static final LineSpec PLAIN = new LineSpec(null, 9600, "8N1", ",", false, Map.of(), Dialect.PLAIN);
 
     private final LineSpec line;
     private final SimulatedRows rows;
@@ -38,8 +39,8 @@ public final class RehearsedLines {
         return rows.seconds();
     }
 
-    /** Without its end. */
-    public String text() {
-        return RawText.of(line, rows);
+    /** The line with its start and its end. */
+    byte[] bytes() {
+        return RawText.sent(line, rows);
     }
 }

@@ -102,8 +102,8 @@ public final class Rehearsing {
             csv.write(sheet.channels().stream().map(Channel::name).collect(Collectors.joining(",", "time,", "\n")));
             while (rows.advance()) {
                 if (log != null && line != null) {
-                    log.write(
-                            String.format(Locale.ROOT, "%.6f\t%s\\x0D\\x0A\n", rows.seconds(), RawText.of(line, rows)));
+                    log.write(String.format(Locale.ROOT, "%.6f\t", rows.seconds())
+                            + RawBytes.text(RawText.sent(line, rows)) + "\n");
                 }
                 if (!rows.isGarbled()) {
                     csv.write(row(rows));

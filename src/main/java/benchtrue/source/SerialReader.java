@@ -67,7 +67,7 @@ final class SerialReader implements Runnable, FrameSink, KeptPort.Listener {
     @Override
     public void frame(byte[] bytes, int from, int to, int end, long firstByteNanos, boolean cutShort) {
         long stamp = clock.stamp(firstByteNanos);
-        recording.raw(stamp, Arrays.copyOfRange(bytes, from, end));
+        recording.raw(stamp, Arrays.copyOf(bytes, end));
         put(new Arrival(stamp, Arrays.copyOfRange(bytes, from, to), !first && !cutShort, ""));
         first = false;
     }

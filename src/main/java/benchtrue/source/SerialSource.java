@@ -70,7 +70,7 @@ public final class SerialSource implements Source {
     }
 
     private Outcome line(byte[] line, Arrival arrival, Reading into) {
-        if (parser.isBlank(line)) {
+        if (LineParser.isBlank(line)) {
             return Outcome.WAITING;
         }
         String wrong = parser.parse(line, 0, line.length, into);

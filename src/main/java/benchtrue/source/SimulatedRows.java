@@ -22,6 +22,7 @@ final class SimulatedRows implements Rows {
     private static final long NANOS = 1_000_000_000L;
 
     private final Rehearsal rehearsal;
+    private final List<String> names;
     private final TrueRun truth;
     private final List<Indication> indications = new ArrayList<>();
     private final Noise garbling;
@@ -38,6 +39,7 @@ final class SimulatedRows implements Rows {
         this.rehearsal = rehearsal;
         truth = new TrueRun(sheet, rehearsal);
         List<Channel> channels = sheet.channels();
+        names = channels.stream().map(Channel::name).toList();
         for (int channel = 0; channel < channels.size(); channel++) {
             indications.add(new Indication(channel, channels.get(channel), channels.size(), rehearsal, seed));
         }
@@ -109,6 +111,11 @@ final class SimulatedRows implements Rows {
     /** Real seconds since the start, whatever the device's clock says. */
     double seconds() {
         return seconds;
+    }
+
+    /** Of the channels, in the order of the cells. */
+    List<String> names() {
+        return names;
     }
 
     /** Each a whole number of steps; null where it is missing. Filled again. */

@@ -5,6 +5,7 @@ import benchtrue.model.Unit;
 import benchtrue.sheet.Alarms;
 import benchtrue.sheet.BenchSheet;
 import benchtrue.sheet.Channel;
+import benchtrue.sheet.Dialect;
 import benchtrue.sheet.LineSpec;
 import benchtrue.sheet.ReferenceSpec;
 import java.util.ArrayList;
@@ -22,12 +23,12 @@ final class Sheets {
     }
 
     static BenchSheet withDecimalComma(String... namesAndUnits) {
-        return of(new LineSpec(null, 9600, "8N1", ";", true, Map.of()), namesAndUnits);
+        return of(new LineSpec(null, 9600, "8N1", ";", true, Map.of(), Dialect.PLAIN), namesAndUnits);
     }
 
     /** 9600 baud. */
     static LineSpec line(String frame) {
-        return new LineSpec(null, 9600, frame, ",", false, Map.of());
+        return new LineSpec(null, 9600, frame, ",", false, Map.of(), Dialect.PLAIN);
     }
 
     private static BenchSheet of(@Nullable LineSpec line, String... namesAndUnits) {

@@ -1,16 +1,21 @@
-package benchtrue.record;
+package benchtrue.source;
 
+import java.io.ByteArrayOutputStream;
 import java.nio.ByteBuffer;
 import java.nio.charset.CharacterCodingException;
 import java.nio.charset.CharsetDecoder;
 import java.nio.charset.CodingErrorAction;
 import java.nio.charset.StandardCharsets;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 
 /** Bytes of a line as raw.log writes them: controls, backslashes and what is not UTF-8 as {@code \xNN}. */
-final class RawBytes {
+public final class RawBytes {
+    private static final Pattern ESCAPE = Pattern.compile("\\\\x([0-9A-Fa-f]{2})");
+
     private RawBytes() {}
 
-    static String text(byte[] bytes) {
+    public static String text(byte[] bytes) {
         StringBuilder text = new StringBuilder(bytes.length + 8);
         for (int at = 0; at < bytes.length; ) {
             int size = size(bytes, at);
@@ -45,5 +50,19 @@ final class RawBytes {
         } catch (CharacterCodingException e) {
             return 0; // not UTF-8: written byte by byte
         }
+    }
+
+    /** The bytes that such a text stands for. */
+    public static byte[] of(String text) {
+        ByteArrayOutputStream bytes = new ByteArrayOutputStream();
+        Matcher escape = ESCAPE.matcher(text);
+        int from = 0;
+        while (escape.find()) {
+            bytes.writeBytes(text.substring(from, escape.start()).getBytes(StandardCharsets.UTF_8));
+            bytes.write(Integer.parseInt(escape.group(1), 16));
+            from = escape.end();
+        }
+        bytes.writeBytes(text.substring(from).getBytes(StandardCharsets.UTF_8));
+        return bytes.toByteArray();
     }
 }
