@@ -130,7 +130,15 @@ final class PollReader {
         if (scale == 0 || Double.isInfinite(scale)) {
             keys.mistake("scale", "scale of " + keys.name() + " makes every value the same", "write it as scale = 0.1");
         }
-        return new Register(address, function, register, type, order(keys, type), scale);
+        double[] missing = keys.numbers("missing");
+        return new Register(
+                address,
+                function,
+                register,
+                type,
+                order(keys, type),
+                scale,
+                missing == null ? List.of() : Arrays.stream(missing).boxed().toList());
     }
 
     private static NumberType type(Keys keys) {

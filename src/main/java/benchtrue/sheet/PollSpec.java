@@ -71,6 +71,18 @@ public record PollSpec(double periodSeconds, double timeoutSeconds, Asking askin
      * @param register as the request carries it: counted from 0
      * @param order in which the bytes of a value of two registers come, A being the most significant: a permutation of ABCD
      * @param scale what one unit of the register means, in the channel's unit
+     * @param missing numbers that stand for no value, before they are scaled
      */
-    public record Register(int address, int function, int register, NumberType type, String order, double scale) {}
+    public record Register(
+            int address,
+            int function,
+            int register,
+            NumberType type,
+            String order,
+            double scale,
+            List<Double> missing) {
+        public Register {
+            missing = List.copyOf(missing);
+        }
+    }
 }

@@ -3,6 +3,7 @@ package benchtrue.source;
 import benchtrue.sheet.LineSpec;
 import benchtrue.sheet.PollSpec;
 import benchtrue.sheet.PollSpec.Register;
+import java.math.BigDecimal;
 import java.nio.ByteBuffer;
 import java.util.Arrays;
 import java.util.Collections;
@@ -141,8 +142,15 @@ final class ModbusRtu implements Poller {
     }
 
     private static Result result(Register register, ByteBuffer registers) {
-        double value = RegisterValues.value(register, registers);
-        return Double.isFinite(value) ? new Value(value) : new NoValue("it answers no finite number");
+        double number = RegisterValues.number(register, registers);
+        double value = RegisterValues.scaled(register, number);
+        if (!Double.isFinite(value)) {
+            return new NoValue("it answers no finite number");
+        }
+        return register.missing().contains(number)
+                ? new NoValue("it answers " + new BigDecimal(number).toPlainString()
+                        + ", which the sheet declares as missing")
+                : new Value(value);
     }
 
     /** Of exception codes, as chapter 7 of the protocol has them. */

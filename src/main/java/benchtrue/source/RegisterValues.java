@@ -10,12 +10,9 @@ final class RegisterValues {
     private RegisterValues() {}
 
     /**
-     * A value in the channel's unit. Whole numbers are scaled as decimals, so that 2002 at 0.001 is 2.002 and nothing beside it.
-     *
-     * @param data from where it stands on, as it came over the line
+     * A number in the channel's unit. Whole numbers are scaled as decimals, so that 2002 at 0.001 is 2.002 and nothing beside it.
      */
-    static double value(Register register, ByteBuffer data) {
-        double number = number(register, data);
+    static double scaled(Register register, double number) {
         return register.type() == NumberType.FLOAT32
                 ? number * register.scale()
                 : BigDecimal.valueOf((long) number)
@@ -23,7 +20,8 @@ final class RegisterValues {
                         .doubleValue();
     }
 
-    private static double number(Register register, ByteBuffer data) {
+    /** @param data from where the number stands on, as it came over the line */
+    static double number(Register register, ByteBuffer data) {
         if (register.type().registers() == 1) {
             short bits = data.getShort();
             return register.type() == NumberType.INT16 ? bits : Short.toUnsignedInt(bits);

@@ -27,7 +27,7 @@ public final class Rehearsing {
     private Rehearsing() {}
 
     /**
-     * Writes sheet.toml, readings.csv and, where the sheet has a line, raw.log. The folder is made if need be. Nothing that is
+     * Writes sheet.toml, readings.csv and, where the sheet has a line that is not polled, raw.log. The folder is made if need be. Nothing that is
      * there is ever replaced by something else: a folder that holds another sheet or other readings is refused.
      *
      * @param rehearsal the sheet's own
@@ -95,7 +95,7 @@ public final class Rehearsing {
     private static long writeRows(BenchSheet sheet, Rehearsal rehearsal, long seed, Path readings, Path raw)
             throws IOException {
         SimulatedRows rows = new SimulatedRows(sheet, rehearsal, seed);
-        LineSpec line = sheet.line();
+        LineSpec line = sheet.poll() == null ? sheet.line() : null;
         long count = 0;
         try (BufferedWriter csv = Files.newBufferedWriter(readings, StandardCharsets.UTF_8);
                 BufferedWriter log = line == null ? null : Files.newBufferedWriter(raw, StandardCharsets.UTF_8)) {

@@ -42,7 +42,7 @@ class PollReaderTest {
             timeout = "2 s"
             [poll.channels]
             V = { address = 247, function = 4, register = 8, type = "float32", order = "CDAB" }
-            I = { address = 1, register = 107, type = "int16", scale = 0.01 }
+            I = { address = 1, register = 107, type = "int16", scale = 0.01, missing = [-32768] }
             """;
 
     private static SheetReading read(String text) {
@@ -81,8 +81,8 @@ class PollReaderTest {
                         2,
                         new PollSpec.Modbus(
                                 List.of(
-                                        new Register(1, 3, 107, NumberType.INT16, "ABCD", 0.01),
-                                        new Register(247, 4, 8, NumberType.FLOAT32, "CDAB", 1)),
+                                        new Register(1, 3, 107, NumberType.INT16, "ABCD", 0.01, List.of(-32768.0)),
+                                        new Register(247, 4, 8, NumberType.FLOAT32, "CDAB", 1, List.of())),
                                 false)));
     }
 

@@ -24,7 +24,7 @@ class ModbusRtuTest {
     }
 
     private static Register holding(int register, NumberType type, double scale) {
-        return new Register(17, 3, register, type, "ABCD", scale);
+        return new Register(17, 3, register, type, "ABCD", scale, List.of());
     }
 
     /** With its check. */
@@ -66,7 +66,7 @@ class ModbusRtuTest {
     @Test
     void questionsAreThoseOfTheSpecification() {
         assertThat(modbus(holding(0x6B, NumberType.INT16, 1)).request(0)).isEqualTo(frame("11 03 00 6B 00 01"));
-        Register input = new Register(1, 4, 8, NumberType.UINT16, "ABCD", 1);
+        Register input = new Register(1, 4, 8, NumberType.UINT16, "ABCD", 1, List.of());
         assertThat(modbus(input).request(0)).isEqualTo(frame("01 04 00 08 00 01"));
         assertThat(modbus(holding(0xFFFE, NumberType.FLOAT32, 1)).request(0)).isEqualTo(frame("11 03 FF FE 00 02"));
     }
@@ -75,7 +75,7 @@ class ModbusRtuTest {
     @Test
     void answersAreThoseOfTheSpecification() {
         assertThat(value(holding(0x6B, NumberType.INT16, 1), "11 03 02 02 2B")).isEqualTo(555);
-        Register input = new Register(1, 4, 8, NumberType.UINT16, "ABCD", 0.5);
+        Register input = new Register(1, 4, 8, NumberType.UINT16, "ABCD", 0.5, List.of());
         assertThat(value(input, "01 04 02 00 0A")).isEqualTo(5);
     }
 
@@ -93,7 +93,7 @@ class ModbusRtuTest {
         "UINT16, ABCD, FF FE, 65534"
     })
     void registersMakeNumbersAndNumbersRegisters(NumberType type, String order, String hex, double number) {
-        Register register = new Register(17, 3, 0, type, order, 1);
+        Register register = new Register(17, 3, 0, type, order, 1, List.of());
         String count = type.registers() == 1 ? "02 " : "04 ";
         assertThat(value(register, "11 03 " + count + hex)).isCloseTo(number, within(Math.ulp((float) number) / 2.0));
         assertThat(HEX.formatHex(RegisterValues.bytes(register, number))).isEqualToIgnoringCase(hex);
@@ -205,8 +205,8 @@ class ModbusRtuTest {
         Register zero = holding(0, NumberType.FLOAT32, 1);
         Register two = holding(2, NumberType.INT16, 1);
         Register four = holding(4, NumberType.INT16, 1);
-        Register elsewhere = new Register(18, 3, 3, NumberType.INT16, "ABCD", 1);
-        Register input = new Register(17, 4, 3, NumberType.INT16, "ABCD", 1);
+        Register elsewhere = new Register(18, 3, 3, NumberType.INT16, "ABCD", 1, List.of());
+        Register input = new Register(17, 4, 3, NumberType.INT16, "ABCD", 1, List.of());
         assertThat(questions(false, two, elsewhere, four, zero, input))
                 .containsExactly(List.of(3, 0), List.of(1), List.of(2), List.of(4));
         assertThat(questions(false, two, two)).as("twice the same").containsExactly(List.of(0), List.of(1));
@@ -220,5 +220,13 @@ class ModbusRtuTest {
                 .mapToObj(i -> holding(i, NumberType.INT16, 1))
                 .toArray(Register[]::new);
         assertThat(questions(false, many)).extracting(List::size).containsExactly(125, 1);
+    }
+
+    @Test
+    void aNumberThatStandsForNoneIsNoValue() {
+        Register register = new Register(17, 3, 0, NumberType.INT16, "ABCD", 0.1, List.of(-32768.0, 32767.0));
+        assertThat(result(register, frame("11 03 02 80 00")))
+                .isEqualTo(new Poller.NoValue("it answers -32768, which the sheet declares as missing"));
+        assertThat(result(register, frame("11 03 02 7F FE"))).isEqualTo(new Poller.Value(3276.6));
     }
 }

@@ -82,8 +82,8 @@ class PolledLineTest {
     }
 
     private PolledLine modbus() {
-        Register one = new Register(1, 3, 0, NumberType.INT16, "ABCD", 1);
-        Register two = new Register(2, 3, 0, NumberType.INT16, "ABCD", 1);
+        Register one = new Register(1, 3, 0, NumberType.INT16, "ABCD", 1, List.of());
+        Register two = new Register(2, 3, 0, NumberType.INT16, "ABCD", 1, List.of());
         PollSpec spec = new PollSpec(0.1, 0.5, new PollSpec.Modbus(List.of(one, two), false));
         return new PolledLine(sheet, spec, Poller.of(spec, Sheets.line("8N1")), line, line);
     }
@@ -264,8 +264,8 @@ class PolledLineTest {
 
     @Test
     void valuesThatFollowEachOtherAreReadAtOnce() throws Exception {
-        Register current = new Register(1, 3, 12, NumberType.INT16, "ABCD", 1);
-        Register voltage = new Register(1, 3, 10, NumberType.FLOAT32, "ABCD", 1);
+        Register current = new Register(1, 3, 12, NumberType.INT16, "ABCD", 1, List.of());
+        Register voltage = new Register(1, 3, 10, NumberType.FLOAT32, "ABCD", 1, List.of());
         PollSpec spec = new PollSpec(0.1, 0.5, new PollSpec.Modbus(List.of(current, voltage), false));
         PolledLine polled = new PolledLine(sheet, spec, Poller.of(spec, Sheets.line("8N1")), line, line);
         line.replies.add(frame(1, 3, 6, 0x3F, 0x80, 0, 0, 0, 7));
