@@ -32,6 +32,7 @@ public final class Main {
                 .addSubcommand(new CheckCommand(output))
                 .addSubcommand(new ReplayCommand(output, environment))
                 .addSubcommand(new WatchCommand(output, environment))
+                .addSubcommand(new CompareCommand(output))
                 .addSubcommand(new RehearseCommand(output))
                 .addSubcommand(new PortsCommand(output));
         commands.setUsageHelpAutoWidth(false);
