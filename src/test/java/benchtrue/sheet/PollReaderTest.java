@@ -4,7 +4,10 @@ import static org.assertj.core.api.Assertions.assertThat;
 
 import benchtrue.sheet.PollSpec.NumberType;
 import benchtrue.sheet.PollSpec.Register;
+import java.io.IOException;
 import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.List;
 import java.util.Objects;
 import org.junit.jupiter.api.Test;
@@ -199,5 +202,14 @@ class PollReaderTest {
                 .containsExactly(
                         "rig.toml:11:1: \"*CLS\" is no query, and nothing else is sent; end its header in \"?\","
                                 + " and set the instrument up by hand");
+    }
+
+    @Test
+    void theSheetOfTheManualIsSound() throws IOException {
+        String manual = Files.readString(Path.of("docs/polling.md"));
+        int from = manual.indexOf("```toml\ntitle") + "```toml\n".length();
+        String sheet = manual.substring(from, manual.indexOf("```", from));
+        assertThat(poll(sheet).asking()).isInstanceOf(PollSpec.Modbus.class);
+        assertThat(Objects.requireNonNull(read(sheet).sheet()).rehearsal()).isNotNull();
     }
 }
