@@ -34,14 +34,14 @@ final class KeptPort implements Closeable {
     }
 
     boolean isClosed() {
-        return closed;
+        return closed || SerialLibrary.isEnding();
     }
 
     /** Waits while the port is gone; null once this is closed. */
     @Nullable
     PortLink open() {
         PortLink open = link;
-        return closed ? null : open == null ? reopened() : open;
+        return isClosed() ? null : open == null ? reopened() : open;
     }
 
     /** Gives up a port that is gone. */
@@ -51,7 +51,7 @@ final class KeptPort implements Closeable {
         if (open != null) {
             open.close();
         }
-        if (!closed) {
+        if (!isClosed()) {
             listener.gone("the line is gone");
         }
     }
@@ -60,12 +60,12 @@ final class KeptPort implements Closeable {
     private @Nullable PortLink reopened() {
         long pause = FIRST_PAUSE_MILLIS;
         String told = "";
-        while (!closed) {
+        while (!isClosed()) {
             try {
                 TimeUnit.MILLISECONDS.sleep(pause);
                 PortLink fresh = PortLink.open(port, spec);
                 link = fresh;
-                if (closed) {
+                if (isClosed()) {
                     fresh.close();
                     return null;
                 }

@@ -30,7 +30,7 @@ public final class LinePlayer {
         try (PortLink link = PortLink.open(port, line)) {
             long start = System.nanoTime();
             long count = 0;
-            while (lines.next()) {
+            while (!SerialLibrary.isEnding() && lines.next()) {
                 TimeUnit.NANOSECONDS.sleep(start + (long) (lines.seconds() / pace * NANOS) - System.nanoTime());
                 byte[] bytes = cable.carry(lines.bytes(), (System.nanoTime() - start) / NANOS);
                 if (bytes.length > 0) {

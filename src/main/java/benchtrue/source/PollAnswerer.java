@@ -66,6 +66,9 @@ public final class PollAnswerer {
         long count = 0;
         for (double now = 0; !rig.isOver(now * pace); now = (ticker.nanos() - start) / NANOS) {
             int length = link.read(chunk);
+            if (SerialLibrary.isEnding()) {
+                break;
+            }
             if (length < 0) {
                 throw new IOException("the port is gone after " + count + " answers");
             }

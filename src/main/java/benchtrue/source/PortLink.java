@@ -106,7 +106,7 @@ final class PortLink implements SerialLink, Closeable {
 
     @Override
     public void write(byte[] bytes, int length) throws IOException {
-        if (port.writeBytes(bytes, length) != length) {
+        if (port.writeBytes(bytes, length) != length && !SerialLibrary.isEnding()) {
             throw new IOException("the port is gone");
         }
     }

@@ -16,6 +16,7 @@ final class SerialLibrary {
     private static final String TEMPORARY = "java.io.tmpdir";
 
     private static boolean loaded;
+    private static volatile boolean ending;
 
     private SerialLibrary() {}
 
@@ -29,12 +30,18 @@ final class SerialLibrary {
         try {
             SerialPort.getVersion(); // the first use of the class unpacks and loads
             loaded = true;
+            SerialPort.addShutdownHook(new Thread(() -> ending = true, "serial library"));
         } catch (LinkageError e) {
             throw new IOException("the serial library does not run on this machine (" + e.getMessage() + ")", e);
         } finally {
             restore(shared);
             deleteOnExit(folder);
         }
+    }
+
+    /** Whether the program is ending: then the library takes all ports away by itself, and none of them is gone. */
+    static boolean isEnding() {
+        return ending;
     }
 
     private static void restore(@Nullable String shared) {
