@@ -30,6 +30,7 @@ public final class Main {
     static int run(String[] args, Output output, Map<String, String> environment) {
         CommandLine commands = new CommandLine(new RootCommand(output))
                 .addSubcommand(new CheckCommand(output))
+                .addSubcommand(new SheetCommand(output, System.in))
                 .addSubcommand(new ReplayCommand(output, environment))
                 .addSubcommand(new WatchCommand(output, environment))
                 .addSubcommand(new CompareCommand(output))

@@ -36,9 +36,11 @@ final class ReplayCommand implements Callable<Integer> {
             description = "Replay a file of readings with this sheet, instead of a run folder.")
     private @Nullable Path sheet;
 
-    @Parameters(arity = "1..*", paramLabel = "RUN", description = "Run folders, or with --sheet a file of readings.")
-    @SuppressWarnings("NullAway.Init")
-    private List<Path> runs;
+    @Parameters(
+            arity = "0..*",
+            paramLabel = "RUN",
+            description = "Run folders, or with --sheet a file of readings; without one, what there is to choose from.")
+    private List<Path> runs = new ArrayList<>();
 
     ReplayCommand(Output output, Map<String, String> environment) {
         this.output = output;
@@ -49,6 +51,12 @@ final class ReplayCommand implements Callable<Integer> {
     public Integer call() throws Exception {
         Output out = options.ascii() ? output.inAscii() : output;
         check();
+        if (runs.isEmpty()) {
+            if (sheet != null || !Surroundings.isTerminal()) {
+                throw new ParameterException(spec.commandLine(), "give a RUN folder, or --sheet SHEET READINGS.csv");
+            }
+            runs.add(new Chooser(out, System.in).run());
+        }
         if (runs.size() == 1) {
             return one(out);
         }

@@ -32,7 +32,10 @@ final class WatchCommand implements Callable<Integer> {
     @Mixin
     private final RunOptions options = new RunOptions();
 
-    @Parameters(arity = "0..1", paramLabel = "SHEET", description = "Bench sheet with a [line].")
+    @Parameters(
+            arity = "0..1",
+            paramLabel = "SHEET",
+            description = "Bench sheet with a [line]; without one, what there is to choose from.")
     private @Nullable Path sheetFile;
 
     @Option(names = "--port", paramLabel = "PORT", description = "Instead of the sheet's port.")
@@ -49,6 +52,11 @@ final class WatchCommand implements Callable<Integer> {
     @Override
     public Integer call() throws Exception {
         Output out = options.ascii() ? output.inAscii() : output;
+        if (sheetFile == null && resumed == null && Surroundings.isTerminal()) {
+            Chooser chooser = new Chooser(out, System.in);
+            sheetFile = chooser.sheet();
+            port = port == null ? chooser.port() : port;
+        }
         check();
         LiveFolder folder = folder(out);
         Memory memory = options.memory();

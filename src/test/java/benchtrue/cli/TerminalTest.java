@@ -147,6 +147,27 @@ final class TerminalTest {
     }
 
     @Test
+    void withoutAFolderItOffersWhatThereIs() throws IOException {
+        try (Tmux tmux = new Tmux(folder, 100, 30, "", "replay")) {
+            tmux.awaitText("Which (1 to 8)?");
+            String list = tmux.screen();
+            int number = list.substring(0, list.indexOf("replays/gear-pump"))
+                            .lines()
+                            .toList()
+                            .size()
+                    - 1;
+            tmux.type("99");
+            tmux.press("Enter");
+            tmux.type(Integer.toString(number));
+            tmux.press("Enter");
+            tmux.awaitText("R E P L A Y");
+            tmux.awaitText("Gear-pump");
+            tmux.type("q");
+            tmux.awaitText("exit=");
+        }
+    }
+
+    @Test
     void followsTheWindow() throws IOException {
         try (Tmux tmux = replay(120, 36)) {
             tmux.awaitText("R E P L A Y");
