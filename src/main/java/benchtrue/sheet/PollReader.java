@@ -7,10 +7,13 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Set;
 import org.jspecify.annotations.Nullable;
 
 /** What is asked of polled instruments. */
 final class PollReader {
+    private static final double LONGEST_SECONDS = 86_400;
+    private static final Set<String> PORT_KEYS = Set.of("port", "baud", "frame");
     private static final int LAST_ADDRESS = 247;
     private static final int LAST_REGISTER = 0xFFFF;
     private static final List<String> ORDERS = List.of("ABCD", "CDAB", "BADC", "DCBA");
@@ -32,10 +35,30 @@ final class PollReader {
         if (keys == null || channels.isEmpty()) {
             return null;
         }
-        if (!sheet.has("line")) {
+        PollSpec spec =
+                new PollReader(keys, channels.stream().map(Channel::name).toList()).read();
+        checkLine(sheet, spec != null && spec.asking() instanceof PollSpec.Modbus);
+        return spec;
+    }
+
+    /** Of the keys of [line], only those of the port mean something. */
+    private static void checkLine(Keys sheet, boolean modbus) {
+        Keys line = sheet.table("line", "[line]");
+        if (line == null) {
             sheet.mistake("poll", "[poll] needs a [line]", "add one with baud and frame as the instrument has them");
+            return;
         }
-        return new PollReader(keys, channels.stream().map(Channel::name).toList()).read();
+        for (String key : line.all()) {
+            if (!PORT_KEYS.contains(key)) {
+                line.mistake(key, key + " of [line] is for lines, and with [poll] there are answers", "leave it out");
+            }
+        }
+        if (modbus && line.text("frame", "8N1").startsWith("7")) {
+            line.mistake(
+                    "frame",
+                    "Modbus RTU needs 8 data bits",
+                    "write it as frame = \"8E1\", or as the instrument has it");
+        }
     }
 
     private @Nullable PollSpec read() {
@@ -44,8 +67,8 @@ final class PollReader {
             return null; // of the other keys it cannot be said whether they are right
         }
         boolean scpi = kind.equals("scpi");
-        double period = above0("period", 1);
-        double timeout = above0("timeout", scpi ? 2 : 0.5);
+        double period = duration("period", 1);
+        double timeout = duration("timeout", scpi ? 2 : 0.5);
         PollSpec.Asking asking = scpi
                 ? new PollSpec.Scpi(queries(), terminator(), errors())
                 : new PollSpec.Modbus(registers(), keys.truth("single"));
@@ -58,10 +81,11 @@ final class PollReader {
         return new PollSpec(period, timeout, asking);
     }
 
-    private double above0(String key, double absent) {
+    private double duration(String key, double absent) {
         double seconds = keys.seconds(key, absent);
-        if (seconds == 0) {
-            keys.mistake(key, key + " of [poll] must be above 0", "write it as " + key + " = \"1 s\"");
+        if (seconds == 0 || seconds > LONGEST_SECONDS) {
+            keys.mistake(
+                    key, key + " of [poll] must be above 0 and not above a day", "write it as " + key + " = \"1 s\"");
             return absent;
         }
         return seconds;

@@ -182,7 +182,18 @@ class PollReaderTest {
     @Test
     void aPeriodOrTimeoutOfNothingIsRefused() {
         assertThat(mistakes(MODBUS, "period = 0.5", "period = 0"))
-                .containsExactly("rig.toml:12:1: period of [poll] must be above 0; write it as period = \"1 s\"");
+                .containsExactly(
+                        "rig.toml:12:1: period of [poll] must be above 0 and not above a day; write it as period = \"1 s\"");
+    }
+
+    @Test
+    void theLineIsAPortAndNoMore() {
+        assertThat(mistakes(SCPI, "baud = 9600", "separator = \";\""))
+                .containsExactly(
+                        "rig.toml:8:1: separator of [line] is for lines, and with [poll] there are answers; leave it out");
+        assertThat(mistakes(MODBUS, "\"8E1\"", "\"7E1\""))
+                .containsExactly("rig.toml:9:1: Modbus RTU needs 8 data bits; write it as frame = \"8E1\", or as the"
+                        + " instrument has it");
     }
 
     @Test
