@@ -18,7 +18,6 @@ import java.nio.file.Path;
 import java.nio.file.StandardOpenOption;
 import java.util.List;
 import java.util.concurrent.Callable;
-import org.jspecify.annotations.Nullable;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.Parameters;
@@ -50,22 +49,26 @@ final class SheetCommand implements Callable<Integer> {
         output.line("One line for each answer; an empty one takes what stands in [ ], or leaves the matter out."
                 + " Nothing is written before the end.");
         head(answers, sheet);
-        Path readings = readings(answers);
-        if (readings != null) {
-            Sample sample = Sample.of(readings);
-            questions(answers, sheet, output, sample, true);
-            replayNext(output, write(sheet, output), readings);
+        String from = from(answers);
+        if (isPort(from)) {
+            ofPort(new LineQuestions(answers, from), answers, sheet, output);
         } else {
-            LineQuestions line = new LineQuestions(answers, port);
-            Sample sample = line.ask();
-            List<String> names = questions(answers, sheet, output, sample, false);
-            line.write(sheet, sample, names);
-            watchNext(output, write(sheet, output), sample);
+            ofFile(Path.of(from), answers, sheet, output);
         }
         return ExitStatus.NOTHING_FOUND.code();
     }
 
-    private String port = "";
+    private void ofFile(Path readings, Answers answers, SheetLines sheet, Output output) throws Refusal {
+        questions(answers, sheet, output, Sample.of(readings), true);
+        replayNext(output, write(sheet, output), readings);
+    }
+
+    private void ofPort(LineQuestions line, Answers answers, SheetLines sheet, Output output) throws Refusal {
+        Sample sample = line.ask();
+        List<String> names = questions(answers, sheet, output, sample, false);
+        line.write(sheet, sample, names);
+        watchNext(output, write(sheet, output), sample);
+    }
 
     private void refuseExisting() throws Refusal {
         if (Files.exists(file, LinkOption.NOFOLLOW_LINKS)) {
@@ -90,17 +93,15 @@ final class SheetCommand implements Callable<Integer> {
         }
     }
 
-    /** The file of readings; null where a port was named. */
-    private @Nullable Path readings(Answers answers) throws Refusal {
-        String from = answers.until(
+    /** A file that is there, or a port. */
+    private static String from(Answers answers) throws Refusal {
+        return answers.until(
                 "Where do readings come from: a file, or a serial port as /dev/ttyUSB0 (benchtrue ports lists them)?",
                 answer -> isPort(answer) || isFile(answer)
                         ? new Answers.Heard.Taken<>(answer)
                         : new Answers.Heard.Refused<>(
                                 "\"" + answer + "\" is neither a file that is there nor a port; a port begins with"
                                         + " /dev/ or is called COM1"));
-        port = from;
-        return isPort(from) ? null : Path.of(from);
     }
 
     private static boolean isPort(String answer) {
