@@ -46,18 +46,29 @@ record Sample(List<String> lines, String separator, List<Field> fields, boolean 
             if (lines.isEmpty()) {
                 throw new Refusal(file + ": the file is empty; name one that has readings");
             }
-            return of(lines);
+            return of(lines, lines.size() > 1 && isHeader(lines.get(0)));
         } catch (IOException e) {
             throw new Refusal(file + ": cannot be read (" + Failure.words(e) + ")");
         }
     }
 
-    /** @param lines at least one, none blank */
-    static Sample of(List<String> lines) {
+    /**
+     * Of an instrument.
+     *
+     * @param lines at least one, none blank
+     */
+    static Sample ofLines(List<String> lines) {
+        return of(lines, false);
+    }
+
+    private static boolean isHeader(String line) {
+        return split(line, separator(line)).stream()
+                .noneMatch(f -> isValue(f) || NAMED.matcher(f).matches());
+    }
+
+    private static Sample of(List<String> lines, boolean hasHeads) {
         String separator = separator(lines.get(0));
         List<String> first = split(lines.get(0), separator);
-        boolean hasHeads = lines.size() > 1
-                && first.stream().noneMatch(f -> isValue(f) || NAMED.matcher(f).matches());
         List<String> values = hasHeads ? split(lines.get(1), separator) : first;
         List<Field> fields = new ArrayList<>();
         for (int i = 0; i < first.size(); i++) {

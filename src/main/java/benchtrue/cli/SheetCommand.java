@@ -10,6 +10,7 @@ import benchtrue.source.Opened;
 import benchtrue.source.RawBytes;
 import benchtrue.source.ReplaySource;
 import java.io.IOException;
+import java.io.InputStream;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.InvalidPathException;
@@ -18,6 +19,7 @@ import java.nio.file.Path;
 import java.nio.file.StandardOpenOption;
 import java.util.List;
 import java.util.concurrent.Callable;
+import java.util.function.Predicate;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.Parameters;
@@ -28,6 +30,7 @@ final class SheetCommand implements Callable<Integer> {
     private static final int WIDTH = 100;
 
     private final Output given;
+    private final InputStream typed;
 
     @Parameters(paramLabel = "NEW.toml", description = "The sheet to make; a file that is there already is left alone.")
     @SuppressWarnings("NullAway.Init")
@@ -36,22 +39,23 @@ final class SheetCommand implements Callable<Integer> {
     @Option(names = "--ascii", description = "Nothing but ASCII characters.")
     private boolean ascii;
 
-    SheetCommand(Output output) {
+    SheetCommand(Output output, InputStream typed) {
         given = output;
+        this.typed = typed;
     }
 
     @Override
     public Integer call() throws Refusal {
         refuseExisting();
         Output output = ascii ? given.inAscii() : given;
-        Answers answers = new Answers(System.in, output);
+        Answers answers = new Answers(typed, output);
         SheetLines sheet = new SheetLines(output);
         output.line("One line for each answer; an empty one takes what stands in [ ], or leaves the matter out."
                 + " Nothing is written before the end.");
         head(answers, sheet);
         String from = from(answers);
         if (isPort(from)) {
-            ofPort(new LineQuestions(answers, from), answers, sheet, output);
+            ofPort(new LineQuestions(answers, output, from), answers, sheet, output);
         } else {
             ofFile(Path.of(from), answers, sheet, output);
         }
@@ -104,13 +108,19 @@ final class SheetCommand implements Callable<Integer> {
                                         + " /dev/ or is called COM1"));
     }
 
+    /** A device that is there or may be plugged in later; pseudo-terminals are anywhere. */
     private static boolean isPort(String answer) {
-        return answer.startsWith("/dev/") || answer.matches("COM\\d+");
+        return answer.matches("/dev/.+|COM\\d+")
+                || (is(answer, Files::exists) && !is(answer, Files::isRegularFile) && !is(answer, Files::isDirectory));
     }
 
     private static boolean isFile(String answer) {
+        return is(answer, Files::isRegularFile);
+    }
+
+    private static boolean is(String answer, Predicate<Path> kind) {
         try {
-            return !answer.isEmpty() && Files.isRegularFile(Path.of(answer));
+            return !answer.isEmpty() && kind.test(Path.of(answer));
         } catch (InvalidPathException e) {
             return false; // no file can be called so
         }

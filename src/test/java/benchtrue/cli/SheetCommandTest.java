@@ -161,7 +161,7 @@ class SheetCommandTest {
         List<String> answers = List.of(
                 "Cell",
                 "",
-                "/dev/ttyUSB0",
+                "/dev/ttyNONE0",
                 "19200",
                 "7E1",
                 "7;20,1;1,25",
@@ -186,14 +186,17 @@ class SheetCommandTest {
         assertThat(answer(sheet, answers)).as(said() + errors()).isZero();
         assertThat(sheet).content().endsWith("""
                 [line]
-                port = "/dev/ttyUSB0"
+                port = "/dev/ttyNONE0"
                 baud = 19200
                 frame = "7E1"
                 separator = ";"
                 decimal_comma = true
                 fields = ["-", "T", "I"]
                 """);
-        assertThat(said()).contains("  -> ").contains("20.1").contains("Next: benchtrue watch " + sheet);
+        assertThat(said())
+                .contains("/dev/ttyNONE0: there is no such port")
+                .contains("20.1")
+                .contains("Next: benchtrue watch " + sheet);
         assertThat(said()).doesNotContain("not understood");
     }
 
