@@ -54,6 +54,11 @@ public final class Relation {
         return response.unit();
     }
 
+    /** Of every reading, where it is the same; NaN where it varies. */
+    public double constantWeight() {
+        return weight instanceof Code.Constant constant ? constant.value() : Double.NaN;
+    }
+
     /** In the order in which the equation names them. */
     public List<Unknown> unknowns() {
         return unknowns;

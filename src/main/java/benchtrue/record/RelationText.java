@@ -16,17 +16,30 @@ final class RelationText {
 
     void write() {
         page.heading(relation.equation());
-        page.paragraph(
-                "Memory " + relation.memory() + ". s = " + Figures.figure(relation.residualStandardDeviation(), 3)
-                        + unit(relation.unit()) + " with ν = " + Figures.figure(relation.degreesOfFreedom(), 3) + "; "
-                        + Figures.figure(relation.effectiveReadings(), 3) + " effective readings; condition index "
-                        + Figures.figure(relation.conditionIndex(), 3) + ".");
+        page.paragraph("Memory " + relation.memory() + ". " + residual() + " with ν = "
+                + Figures.figure(relation.degreesOfFreedom(), 3) + "; "
+                + Figures.figure(relation.effectiveReadings(), 3) + " effective readings; condition index "
+                + Figures.figure(relation.conditionIndex(), 3) + ".");
         inseparable();
         unknowns(relation.unknowns());
         batch();
         budget();
         tests();
         segments();
+    }
+
+    /** Of a single reading where all weigh the same: what its noise can be compared with. */
+    private String residual() {
+        double s = relation.residualStandardDeviation();
+        double weight = relation.weight();
+        String ofWeightOne = Figures.figure(s, 3) + unit(relation.unit());
+        if (weight == 1) {
+            return "s = " + ofWeightOne;
+        }
+        return weight > 0
+                ? "s = " + Figures.figure(s / Math.sqrt(weight), 3) + unit(relation.unit()) + " for a reading ("
+                        + ofWeightOne + " for one of weight 1)"
+                : "s = " + ofWeightOne + " for a reading of weight 1";
     }
 
     private void inseparable() {

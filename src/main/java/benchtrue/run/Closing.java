@@ -54,6 +54,8 @@ public record Closing(
     /**
      * @param unknowns of the whole run at λ = 1, of the live memory otherwise
      * @param floorRows pseudo-rows that the floor added
+     * @param residualStandardDeviation of a reading of weight 1
+     * @param weight of every reading; NaN where it varies
      * @param residualTests a sentence each
      */
     public record Relation(
@@ -65,6 +67,7 @@ public record Closing(
             long floorRows,
             List<Unknown> unknowns,
             double residualStandardDeviation,
+            double weight,
             double degreesOfFreedom,
             double conditionIndex,
             List<List<String>> inseparable,

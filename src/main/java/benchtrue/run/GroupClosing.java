@@ -100,6 +100,7 @@ final class GroupClosing {
                 estimator.floorRows(),
                 unknowns(places, stated, true),
                 estimator.residualSd(k),
+                spec.relation().constantWeight(),
                 estimator.degreesOfFreedom(k),
                 diagnosis.conditionIndex(),
                 Names.groups(group, diagnosis.inseparable()),

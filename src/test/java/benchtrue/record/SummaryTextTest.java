@@ -29,6 +29,13 @@ final class SummaryTextTest {
     }
 
     @Test
+    void saysOfWhichReadingTheResidualsStandardDeviationIs() {
+        // 0.997·0.06 = 0.0598: the weight is 1/0.06²
+        assertThat(page.replaceAll("\\s+", " "))
+                .contains("s = 0.0598 L/min for a reading (0.997 L/min for one of weight 1)");
+    }
+
+    @Test
     void judgesUnderTheRuleOrSaysWhyNot() {
         assertThat(page)
                 .contains("conditional pass under a guard band of U")

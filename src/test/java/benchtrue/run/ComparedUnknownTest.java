@@ -44,6 +44,7 @@ final class ComparedUnknownTest {
                 0,
                 List.of(unknown),
                 0.01,
+                1,
                 100,
                 1,
                 List.of(),
