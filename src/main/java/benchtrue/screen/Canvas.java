@@ -3,8 +3,6 @@ package benchtrue.screen;
 import com.googlecode.lanterna.TerminalPosition;
 import com.googlecode.lanterna.TerminalSize;
 import com.googlecode.lanterna.TerminalTextUtils;
-import com.googlecode.lanterna.TextCharacter;
-import com.googlecode.lanterna.TextColor;
 import com.googlecode.lanterna.graphics.TextGraphics;
 
 /**
@@ -13,13 +11,18 @@ import com.googlecode.lanterna.graphics.TextGraphics;
  */
 final class Canvas {
     private static final char REPLACED = '\uFFFD';
+    private static final char FIRST_WIDE = '\u1100';
+    private static final char FIRST_LINE = '\u2500';
+    private static final char LAST_BRAILLE = '\u28FF';
 
     private final TextGraphics graphics;
     private final boolean ascii;
+    private final Cells cells;
 
-    Canvas(TextGraphics graphics, boolean ascii) {
+    Canvas(TextGraphics graphics, boolean ascii, Cells cells) {
         this.graphics = graphics;
         this.ascii = ascii;
+        this.cells = cells;
     }
 
     int width() {
@@ -38,7 +41,8 @@ final class Canvas {
     Canvas part(int x, int y, int width, int height) {
         int columns = Math.max(0, Math.min(width, width() - x));
         int rows = Math.max(0, Math.min(height, height() - y));
-        return new Canvas(graphics.newTextGraphics(new TerminalPosition(x, y), new TerminalSize(columns, rows)), ascii);
+        return new Canvas(
+                graphics.newTextGraphics(new TerminalPosition(x, y), new TerminalSize(columns, rows)), ascii, cells);
     }
 
     void blank() {
@@ -53,17 +57,18 @@ final class Canvas {
     int put(int x, int y, String text, Style style) {
         int column = x;
         String shown = shown(text, ascii);
+        int right = width();
+        if (y < 0 || y >= height()) {
+            return column;
+        }
         for (int i = 0; i < shown.length(); i++) {
             char c = shown.charAt(i);
-            int cells = cells(c);
-            if (column + cells > width() || y < 0 || y >= height()) {
+            int taken = cells(c);
+            if (column + taken > right) {
                 break;
             }
-            graphics.setCharacter(
-                    column,
-                    y,
-                    TextCharacter.fromCharacter(c, TextColor.ANSI.DEFAULT, TextColor.ANSI.DEFAULT, style.codes())[0]);
-            column += cells;
+            graphics.setCharacter(column, y, cells.of(c, style));
+            column += taken;
         }
         return column;
     }
@@ -80,11 +85,18 @@ final class Canvas {
 
     /** How many cells a text takes here. */
     int width(String text) {
-        return shown(text, ascii).chars().map(c -> cells((char) c)).sum();
+        String shown = shown(text, ascii);
+        int width = 0;
+        for (int i = 0; i < shown.length(); i++) {
+            width += cells(shown.charAt(i));
+        }
+        return width;
     }
 
     private static int cells(char c) {
-        return TerminalTextUtils.isCharDoubleWidth(c) ? 2 : 1;
+        boolean narrow =
+                c < FIRST_WIDE || (c >= FIRST_LINE && c <= LAST_BRAILLE); // what nearly all of a frame is made of
+        return !narrow && TerminalTextUtils.isCharDoubleWidth(c) ? 2 : 1;
     }
 
     /** Shortened to a width, the last cell then saying so. */
@@ -100,10 +112,20 @@ final class Canvas {
         return width < 1 ? "" : kept + more;
     }
 
+    private static boolean isSimple(String text, boolean ascii) {
+        for (int i = 0; i < text.length(); i++) {
+            char c = text.charAt(i);
+            boolean ours = !ascii && c >= FIRST_LINE && c <= LAST_BRAILLE;
+            if (c < ' ' || (c >= 127 && !ours)) {
+                return false;
+            }
+        }
+        return true;
+    }
+
     /** Each character a cell or two of its own: no controls, nothing that combines, nothing beyond what terminals agree on. */
     private static String shown(String text, boolean ascii) {
-        boolean simple = text.chars().allMatch(c -> c >= ' ' && c < 127);
-        if (simple) {
+        if (isSimple(text, ascii)) {
             return text;
         }
         StringBuilder shown = new StringBuilder();

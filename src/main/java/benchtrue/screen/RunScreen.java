@@ -32,6 +32,7 @@ public final class RunScreen {
     private final boolean ascii;
     private final Function<Closing, String> closingText;
     private final Look look = new Look();
+    private final Cells cells = new Cells();
     private final Operator operator;
     private final ConcurrentLinkedQueue<String> troubles = new ConcurrentLinkedQueue<>();
 
@@ -85,7 +86,7 @@ public final class RunScreen {
             return;
         }
         notice(latest);
-        Frame.draw(new Canvas(screen.newTextGraphics(), ascii), shown(latest, now));
+        Frame.draw(new Canvas(screen.newTextGraphics(), ascii, cells), shown(latest, now));
         screen.refresh(resized ? Screen.RefreshType.COMPLETE : Screen.RefreshType.DELTA);
         drawn = latest;
         drawnAt = now;

@@ -63,7 +63,7 @@ final class FrameTest {
 
     private static boolean reversed(Snapshot snapshot, String word) {
         BasicTextImage image = new BasicTextImage(new TerminalSize(120, 36));
-        Frame.draw(new Canvas(image.newTextGraphics(), false), Picture.shown(snapshot));
+        Frame.draw(new Canvas(image.newTextGraphics(), false, new Cells()), Picture.shown(snapshot));
         for (int y = 20; y < 36; y++) {
             StringBuilder marked = new StringBuilder();
             for (int x = 0; x < 120; x++) {

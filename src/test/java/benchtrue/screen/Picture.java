@@ -15,7 +15,7 @@ final class Picture {
 
     static String of(Shown shown, int width, int height, boolean ascii) {
         BasicTextImage image = new BasicTextImage(new TerminalSize(width, height));
-        Frame.draw(new Canvas(image.newTextGraphics(), ascii), shown);
+        Frame.draw(new Canvas(image.newTextGraphics(), ascii, new Cells()), shown);
         StringBuilder text = new StringBuilder();
         for (int y = 0; y < height; y++) {
             StringBuilder row = new StringBuilder();
