@@ -43,7 +43,7 @@ public final class LatencyBench {
     private static final String SHEET = """
             title = "Latency"
             [channels]
-            t = { unit = "us" }
+            sent = { unit = "us" }
             I = { unit = "A" }
             V = { unit = "V", noise = 0.01 }
             [[relations]]

@@ -22,7 +22,7 @@ import org.junit.jupiter.api.io.TempDir;
 
 /** Live runs of the finished jar on a real pseudo-terminal pair. */
 @Tag("end-to-end")
-@Timeout(240)
+@Timeout(900)
 final class WatchTest {
     private static final int CUTS = Integer.getInteger("cuts", 8);
     private static final int KILLS = Integer.getInteger("kills", 8);
