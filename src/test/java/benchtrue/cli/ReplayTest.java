@@ -11,6 +11,7 @@ import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.nio.file.StandardCopyOption;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -142,6 +143,7 @@ final class ReplayTest {
         Files.writeString(run.resolve("acts.csv"), """
                 reading,time,act,argument,text
                 1000,199.8,mark,,oil at 40 degC
+                1200,239.8,memory,60 s,
                 1500,299.8,segment,,hose changed
                 2000,399.8,acknowledge,1,gauge looked at
                 """);
@@ -152,6 +154,16 @@ final class ReplayTest {
                 .contains("hose changed")
                 .contains("gauge looked at");
         assertThat(out.resolve("acts.csv")).hasSameTextualContentAs(run.resolve("acts.csv"));
+        Files.copy(out.resolve("acts.csv"), run.resolve("acts.csv"), StandardCopyOption.REPLACE_EXISTING);
+        Path again = folder.resolve("out-again");
+        run("replay", run.toString(), "--out", again.toString());
+        for (String file : List.of("acts.csv", "estimates.csv", "events.csv", "summary.json", "summary.txt")) {
+            assertThat(again.resolve(file)).hasSameBinaryContentAs(out.resolve(file));
+        }
+        Path without = folder.resolve("out-without");
+        run("replay", FIRST, "--out", without.toString());
+        assertThat(Files.mismatch(without.resolve("estimates.csv"), out.resolve("estimates.csv")))
+                .isNotEqualTo(-1);
     }
 
     @Test
