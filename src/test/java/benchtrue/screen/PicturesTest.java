@@ -6,6 +6,7 @@ import benchtrue.run.Shots;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.List;
 import java.util.Locale;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -16,6 +17,8 @@ import org.junit.jupiter.params.provider.CsvSource;
  * -Dpictures=write} makes them anew.
  */
 final class PicturesTest {
+    private static final String SHOWN = "gear-pump";
+    private static final List<Path> PAGES = List.of(Path.of("README.md"), Path.of("docs", "screen.md"));
     private static final Path FOLDER = Path.of("docs", "pictures");
 
     @BeforeAll
@@ -33,9 +36,26 @@ final class PicturesTest {
         String picture = Picture.of(Shots.of(rig, seconds), 120, 36);
         Path path = FOLDER.resolve(file);
         if ("write".equals(System.getProperty("pictures"))) {
-            Files.createDirectories(FOLDER);
-            Files.writeString(path, picture);
+            write(path, picture);
         }
         assertThat(path).as("made by -Dpictures=write").hasContent(picture);
+        if (rig.equals(SHOWN)) {
+            for (Path page : PAGES) {
+                assertThat(page).as("made by -Dpictures=write").content().contains(picture.strip());
+            }
+        }
+    }
+
+    /** The pages that show the picture change with it. */
+    private static void write(Path path, String picture) throws IOException {
+        String before = Files.exists(path) ? Files.readString(path).strip() : "";
+        Files.createDirectories(FOLDER);
+        Files.writeString(path, picture);
+        for (Path page : PAGES) {
+            String text = Files.readString(page);
+            if (!before.isEmpty() && text.contains(before)) {
+                Files.writeString(page, text.replace(before, picture.strip()));
+            }
+        }
     }
 }
