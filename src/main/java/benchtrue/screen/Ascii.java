@@ -37,7 +37,7 @@ public final class Ascii {
 
     private Ascii() {}
 
-    /** What has no transcription becomes a question mark. */
+    /** What has no counterpart becomes a question mark. */
     public static String of(String text) {
         StringBuilder plain = new StringBuilder();
         text.codePoints()
