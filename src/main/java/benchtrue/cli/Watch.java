@@ -73,6 +73,9 @@ final class Watch {
                 RunFiles files = RunFiles.resume(
                         folder.path(), sheet, options.every(), folder.acts().size(), errors::error)) {
             Source line = open(before, recorder);
+            if (lines != null) {
+                output.line("Listening to " + port);
+            }
             SourceMaker maker = () -> folder.isResumed() ? new ResumedSource(record(), line) : line;
             SourceMaker record = () -> {
                 recorder.settle();
